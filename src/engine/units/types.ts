@@ -1,0 +1,26 @@
+/**
+ * Exponents of the base quantities, in the order of `baseQuantities`. Rational exponents are kept
+ * as exact fractions in twelfths (so 1/2, 1/3, 1/4 and 1/6 are whole numbers here).
+ */
+export type Dimension = readonly number[];
+
+export const baseQuantities = ['length', 'mass', 'time', 'temperature', 'amount', 'current', 'luminosity', 'angle', 'currency'] as const;
+export const dimensionDenominator = 12;
+
+/**
+ * A unit expression after a number or after `to`, resolved against the unit table.
+ * value in SI = number * factor + offset.
+ */
+export interface ResolvedUnit {
+  /** As written: `kJ/(kg K)`. */
+  text: string;
+  factor: number;
+  /** Only for levels: 273.15 for degC; for gauge units the ambient pressure is added when evaluated. */
+  offset: number;
+  dimension: Dimension;
+  /** A level counts as one level, everything else as none. */
+  level?: 'temperature' | 'gauge pressure' | undefined;
+  /** `kJ/(kg·K)` with superscripts. */
+  display: string;
+  latex: string;
+}
