@@ -24,3 +24,22 @@ export interface ResolvedUnit {
   display: string;
   latex: string;
 }
+
+/** A value as it is shown, with the exact SI value behind it. */
+export interface DisplayedValue {
+  /** In coherent SI units (kelvin for a temperature level); a truth value for conditions. */
+  si: number | boolean;
+  /** Coherent SI unit of `si`, as text: `W/(m^2*K)`; `1` for a plain number. */
+  siUnit: string;
+  /** The figure as shown, rounded, thousands parted by U+00A0, with the decimal sign `.`. */
+  text: string;
+  /** `text` before the decimal sign … */
+  whole: string;
+  /** … and from the decimal sign on (may be empty); power of ten included: `.23×10⁶`. */
+  fraction: string;
+  /** Unit as shown, in plain text with superscripts: `W/(m²·K)`; empty for a plain number. */
+  unit: string;
+  unitLatex: string;
+  /** `temperature` for levels (°C, K), `pressure` for gauge levels. */
+  level?: 'temperature' | 'pressure' | undefined;
+}
