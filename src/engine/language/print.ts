@@ -7,7 +7,8 @@ export function formatExpression(expression: Expression): string {
       const unit = expression.unit === undefined ? '' : ` ${expression.unit.unit.text}`;
       const { uncertainty } = expression;
       if (uncertainty === undefined) return expression.text + unit;
-      const amount = uncertainty.relative ? `${uncertainty.value * 100} %` : `${uncertainty.value}${unit}`;
+      const amount =
+        uncertainty.text ?? (uncertainty.relative ? `${uncertainty.value * 100} %` : `${uncertainty.value}${unit}`);
       return `${expression.text}${unit} ± ${amount}`;
     }
     case 'name':
@@ -25,7 +26,12 @@ export function formatExpression(expression: Expression): string {
       return formatExpression(expression.left) + sign + formatExpression(expression.right);
     }
     case 'comparison':
-      return expression.operands.map((operand, index) => (index === 0 ? '' : ` ${expression.operators[index - 1] ?? ''} `) + formatExpression(operand)).join('');
+      return expression.operands
+        .map(
+          (operand, index) =>
+            (index === 0 ? '' : ` ${expression.operators[index - 1] ?? ''} `) + formatExpression(operand),
+        )
+        .join('');
     case 'logical':
       return `${formatExpression(expression.left)} ${expression.operator} ${formatExpression(expression.right)}`;
     case 'call':

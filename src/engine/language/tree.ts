@@ -12,11 +12,18 @@ interface Node {
 export interface NumberNode extends Node {
   type: 'number';
   value: number;
-  /** Figures as written, for printing: `38.5`, `1.5e-3`. */
+  /** Figures as written, for printing: `38.5`, `1.5e-3`; `-5` where the sign belongs to a level (`-5 degC`). */
   text: string;
   unit?: UnitNode | undefined;
   /** Standard uncertainty (k = 1), in the unit of the literal or as a fraction of the value. */
-  uncertainty?: { value: number; relative: boolean } | undefined;
+  uncertainty?:
+    | {
+        value: number;
+        relative: boolean;
+        /** As written behind the sign ±, for printing: `0.1 mm`, `10 % (k=2)`. */
+        text?: string | undefined;
+      }
+    | undefined;
 }
 export interface NameNode extends Node {
   type: 'name';

@@ -25,15 +25,21 @@ export function usesOf(expression: Expression): (NameNode | MemberNode)[] {
   return partsOf(expression).flatMap(usesOf);
 }
 
+/** The same under the name that lists use: names and members with their spans. */
+export const namesOf = usesOf;
+
 /** Without the parentheses around it. */
 export function ungrouped(expression: Expression): Expression {
   return expression.type === 'group' ? ungrouped(expression.inner) : expression;
 }
 
 /** Whether the expression is nothing but a literal, perhaps with a sign. */
-export function literalOf(expression: Expression): { sign: 1 | -1; literal: Extract<Expression, { type: 'number' }> } | undefined {
+export function literalOf(
+  expression: Expression,
+): { sign: 1 | -1; literal: Extract<Expression, { type: 'number' }> } | undefined {
   const inner = ungrouped(expression);
   if (inner.type === 'number') return { sign: 1, literal: inner };
-  if (inner.type === 'unary' && inner.operator === '-' && inner.operand.type === 'number') return { sign: -1, literal: inner.operand };
+  if (inner.type === 'unary' && inner.operator === '-' && inner.operand.type === 'number')
+    return { sign: -1, literal: inner.operand };
   return undefined;
 }

@@ -16,7 +16,19 @@ export interface DisplayOptions {
   figures?: string | undefined;
 }
 
-const superscript: Readonly<Record<string, string>> = { '-': '⁻', 0: '⁰', 1: '¹', 2: '²', 3: '³', 4: '⁴', 5: '⁵', 6: '⁶', 7: '⁷', 8: '⁸', 9: '⁹' };
+const superscript: Readonly<Record<string, string>> = {
+  '-': '⁻',
+  0: '⁰',
+  1: '¹',
+  2: '²',
+  3: '³',
+  4: '⁴',
+  5: '⁵',
+  6: '⁶',
+  7: '⁷',
+  8: '⁸',
+  9: '⁹',
+};
 const raised = (power: number) => [...String(power)].map((sign) => superscript[sign] ?? sign).join('');
 
 /** Parts thousands of the whole part by a no-break space (ISO 80000-1, 7.3.1). */
@@ -36,9 +48,15 @@ export function figure(value: number, digits: number): Figure {
   const exponent = Number(power);
   if (exponent < -4 || exponent > 8) {
     const [whole = '0', decimals] = mantissa.split('.');
-    return { whole: whole.replace('-', '−'), fraction: `${decimals === undefined ? '' : `.${decimals}`}×10${raised(exponent)}` };
+    return {
+      whole: whole.replace('-', '−'),
+      fraction: `${decimals === undefined ? '' : `.${decimals}`}×10${raised(exponent)}`,
+    };
   }
-  const plain = exponent >= digits ? String(BigInt(Math.round(Number(`${mantissa}e${exponent}`)))) : Number(`${mantissa}e${exponent}`).toFixed(Math.max(0, digits - 1 - exponent));
+  const plain =
+    exponent >= digits
+      ? String(BigInt(Math.round(Number(`${mantissa}e${exponent}`))))
+      : Number(`${mantissa}e${exponent}`).toFixed(Math.max(0, digits - 1 - exponent));
   return split(plain);
 }
 
@@ -77,7 +95,8 @@ export function fromUnit(value: number, unit: ResolvedUnit, ambientPressure: num
 export function displayValue(si: number, dimension: Dimension, options: DisplayOptions): DisplayedValue {
   const unit = unitFor(si, dimension, options);
   const value = inUnit(si, unit, options.ambientPressure);
-  const digits = unit.level === 'temperature' ? levelDigits(value, options.significantDigits) : options.significantDigits;
+  const digits =
+    unit.level === 'temperature' ? levelDigits(value, options.significantDigits) : options.significantDigits;
   const shown = options.figures === undefined ? figure(value, digits) : split(options.figures);
   return {
     si,

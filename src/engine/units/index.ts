@@ -1,7 +1,7 @@
 export * from './dimension';
 export * from './display';
 export { quantityName, shownUnit, siUnitText } from './quantities';
-export { editDistance, isUnitless, nearestUnit, plainUnit, resolveUnit, scanUnit } from './resolve';
-export { findUnit, prefixes, unitNames, unitTable } from './table';
-export type { UnitDefinition } from './table';
+export { isUnitless, plainUnit, resolveUnit, scanUnit, underOneSolidus, unitWords, type ScannedUnit } from './resolve';
+export { editDistance, nearestUnit, unitProblem, unitProblemAt, type UnitProblem } from './suggest';
+export { findUnit, prefixes, unitNames, unitTable, type UnitDefinition } from './table';
 export * from './types';

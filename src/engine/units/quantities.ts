@@ -1,5 +1,6 @@
 import { sameDimension } from './dimension';
 import { resolveUnit } from './resolve';
+import { fractionText } from './write';
 import { dimensionDenominator, type Dimension, type ResolvedUnit } from './types';
 
 /** A kind of quantity: its name in sentences, coherent SI unit, and the units it is shown in. */
@@ -11,7 +12,12 @@ interface Quantity {
   US: readonly (readonly [unit: string, from: number])[];
 }
 
-const row = (name: string, si: string, SI: string, US: string): Quantity => ({ name, si, SI: choices(SI), US: choices(US) });
+const row = (name: string, si: string, SI: string, US: string): Quantity => ({
+  name,
+  si,
+  SI: choices(SI),
+  US: choices(US),
+});
 
 /** `mm, m:0.1` is millimetres, and metres from 0.1 (SI) on. */
 function choices(text: string): [string, number][] {
@@ -32,7 +38,7 @@ const quantities: readonly Quantity[] = [
   row('amount of substance', 'mol', 'mol', 'mol'),
   row('electric current', 'A', 'A', 'A'),
   row('luminous intensity', 'cd', 'cd', 'cd'),
-  row('frequency', '1/s', '1/s', '1/s'),
+  row('frequency or angular velocity', '1/s', '1/s', '1/s'),
   row('velocity', 'm/s', 'm/s', 'ft/s'),
   row('acceleration', 'm/s^2', 'm/s^2', 'ft/s^2'),
   row('volume flow', 'm^3/s', 'L/min, m^3/h:5e-5', 'gal/min'),
@@ -53,7 +59,7 @@ const quantities: readonly Quantity[] = [
   row('thermal resistance', 'K/W', 'K/W', 'h*delta_degF/BTU'),
   row('thermal resistance of an area', 'm^2*K/W', 'm^2*K/W', 'h*ft^2*delta_degF/BTU'),
   row('thermal resistance of a length', 'm*K/W', 'm*K/W', 'h*ft*delta_degF/BTU'),
-  row('heat capacity rate', 'W/K', 'W/K, kW/K:1e4', 'BTU/(h*delta_degF)'),
+  row('conductance or heat capacity rate', 'W/K', 'W/K, kW/K:1e4', 'BTU/(h*delta_degF)'),
   row('heat capacity', 'J/K', 'J/K, kJ/K:1e3', 'BTU/delta_degF'),
   row('specific heat capacity', 'J/(kg*K)', 'J/(kg*K), kJ/(kg*K):1e3', 'BTU/(lb*delta_degF)'),
   row('specific energy', 'J/kg', 'J/kg, kJ/kg:1e3', 'BTU/lb'),
@@ -77,7 +83,7 @@ const quantities: readonly Quantity[] = [
   row('molar mass', 'kg/mol', 'g/mol, kg/mol:1', 'g/mol'),
   row('molar energy', 'J/mol', 'J/mol, kJ/mol:1e3', 'J/mol'),
   row('molar heat capacity', 'J/(mol*K)', 'J/(mol*K)', 'J/(mol*K)'),
-  row('radiation constant', 'W/(m^2*K^4)', 'W/(m^2*K^4)', 'BTU/(h*ft^2*R^4)'),
+  row('radiation constant', 'W/(m^2*K^4)', 'W/(m^2*K^4)', 'BTU/(h*ft^2*degR^4)'),
   row('money', 'EUR', 'EUR', 'EUR'),
   row('price of energy', 'EUR/J', 'EUR/kWh', 'EUR/kWh'),
   row('price per time', 'EUR/s', 'EUR/h', 'EUR/h'),
@@ -108,7 +114,9 @@ export function siUnitText(dimension: Dimension): string {
   const candidates = starts.map(([name, exponent]): [string, number][] => {
     const start = name === '' ? undefined : unitOf(name).dimension;
     const rest = dimension.map((part, index) => part - exponent * (start?.[index] ?? 0));
-    const factors = rest.flatMap((part, index) => (part === 0 ? [] : [[baseUnits[index] ?? '', part / dimensionDenominator] satisfies [string, number]]));
+    const factors = rest.flatMap((part, index) =>
+      part === 0 ? [] : [[baseUnits[index] ?? '', part / dimensionDenominator] satisfies [string, number]],
+    );
     return name === '' ? factors : [[name, exponent], ...factors];
   });
   const shortest = candidates.reduce((best, next) => (next.length < best.length ? next : best));
@@ -118,23 +126,13 @@ export function siUnitText(dimension: Dimension): string {
 function writeProduct(factors: readonly (readonly [string, number])[]): string {
   const power = (name: string, exponent: number) => {
     if (exponent === 1) return name;
-    return Number.isInteger(exponent) ? `${name}^${exponent}` : `${name}^(${asFraction(exponent)})`;
+    return Number.isInteger(exponent) ? `${name}^${exponent}` : `${name}^(${fractionText(exponent)})`;
   };
   const above = factors.filter(([, exponent]) => exponent > 0).map(([name, exponent]) => power(name, exponent));
   const below = factors.filter(([, exponent]) => exponent < 0).map(([name, exponent]) => power(name, -exponent));
   if (above.length + below.length === 0) return '1';
   const denominator = below.length > 1 ? `(${below.join('*')})` : (below[0] ?? '');
   return below.length === 0 ? above.join('*') : `${above.length === 0 ? '1' : above.join('*')}/${denominator}`;
-}
-
-function asFraction(value: number): string {
-  const twelfths = Math.round(value * dimensionDenominator);
-  const divisor = greatestCommonDivisor(Math.abs(twelfths), dimensionDenominator);
-  return `${twelfths / divisor}/${dimensionDenominator / divisor}`;
-}
-
-function greatestCommonDivisor(a: number, b: number): number {
-  return b === 0 ? a : greatestCommonDivisor(b, a % b);
 }
 
 /** `pressure`, `heat transfer coefficient`; for an unnamed dimension `quantity in kg·m`. */

@@ -4,7 +4,17 @@
  */
 export type Dimension = readonly number[];
 
-export const baseQuantities = ['length', 'mass', 'time', 'temperature', 'amount', 'current', 'luminosity', 'angle', 'currency'] as const;
+export const baseQuantities = [
+  'length',
+  'mass',
+  'time',
+  'temperature',
+  'amount',
+  'current',
+  'luminosity',
+  'angle',
+  'currency',
+] as const;
 export const dimensionDenominator = 12;
 
 /**

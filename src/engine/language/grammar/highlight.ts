@@ -13,4 +13,7 @@ export const highlighting = styleTags({
   'Plus Minus Times Divide Caret PlusMinus Coverage': tags.arithmeticOperator,
   Compare: tags.compareOperator,
   Equals: tags.definitionOperator,
+  '( )': tags.paren,
+  ',': tags.separator,
+  Raised: tags.arithmeticOperator,
 });

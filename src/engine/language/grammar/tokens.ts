@@ -1,48 +1,54 @@
 import { ExternalTokenizer, type InputStream } from '@lezer/lr';
 import { scanUnit } from '../../units/resolve';
-import { continuation, Coverage, newline, Unit } from './parser.terms';
+import { goesOn } from '../lines';
+import { continuation, Coverage, newline, PlusMinus, Unit } from './parser.terms';
 
 const endOfLine = 10;
+const openingParenthesis = 40;
+const plus = 43;
+const plusMinus = 177;
 /** Longer unit expressions than this are not written by hand. */
 const unitReach = 120;
+/** How far is looked for the closing parenthesis of a line that goes on. */
+const lineReach = 4000;
 
-function ahead(input: InputStream, reach: number): string {
+/** The text that lies ahead, to the end of the line or over it. */
+function ahead(input: InputStream, reach: number, overLines = false): string {
   let text = '';
   for (let offset = 0; offset < reach; offset += 1) {
     const code = input.peek(offset);
-    if (code < 0 || code === endOfLine) break;
+    if (code < 0 || (code === endOfLine && !overLines)) break;
     text += String.fromCharCode(code);
   }
   return text;
 }
 
-/** A unit stands only directly after a number or after `to`: elsewhere the grammar cannot shift it. */
+/** Units, ± and (k=2) mean what they do only behind a number (a unit also after `to`): elsewhere the grammar cannot shift them. */
 export const unitTokens = new ExternalTokenizer((input, stack) => {
-  if (stack.canShift(Coverage) && input.next === 40) {
+  if (input.next === openingParenthesis && stack.canShift(Coverage)) {
     const coverage = /^\(\s*k\s*=\s*\d+(\.\d+)?\s*\)/.exec(ahead(input, 24));
-    if (coverage !== null) {
-      input.acceptToken(Coverage, coverage[0].length);
-      return;
-    }
+    if (coverage !== null) input.acceptToken(Coverage, coverage[0].length);
+    return;
+  }
+  // `+-` is an uncertainty behind a number only: `a +-b` adds minus b.
+  if ((input.next === plus || input.next === plusMinus) && stack.canShift(PlusMinus)) {
+    const sign = /^(?:±|\+\/?[-−])/.exec(ahead(input, 3));
+    if (sign !== null) input.acceptToken(PlusMinus, sign[0].length);
+    return;
   }
   if (!stack.canShift(Unit)) return;
-  const text = ahead(input, unitReach);
-  // `to` begins a target, never a unit.
-  if (/^(to|and|or|not)\b/.test(text)) return;
-  const scanned = scanUnit(text);
+  const scanned = scanUnit(ahead(input, unitReach));
   if (scanned !== undefined) input.acceptToken(Unit, scanned.end);
 });
 
-/** What can only be the begin of a line of its own, even inside a parenthesis left open. */
-const freshLine = /^[ \t]*(?:#|require\b|[A-Za-z_\u0370-\u03ff][\w\u0370-\u03ff']*[ \t]*=(?!=)|$)/;
-
-/** A line may go on inside parentheses; one left open must not swallow the lines below it. */
+/** The end of a line ends what is written on it, except inside parentheses that close further down. */
 export const newlines = new ExternalTokenizer(
   (input, stack) => {
     if (input.next !== endOfLine) return;
     input.advance();
-    const ends = stack.canShift(newline) || freshLine.test(ahead(input, 200));
-    input.acceptToken(ends ? newline : continuation);
+    const depth = Number(stack.context);
+    const runsOn = depth > 0 && goesOn(ahead(input, lineReach, true), depth);
+    input.acceptToken(runsOn ? continuation : newline);
   },
   { contextual: true },
 );

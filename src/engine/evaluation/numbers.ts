@@ -1,0 +1,28 @@
+import type { Expression } from '../language/tree';
+import { compile, type Plan } from './plan';
+import { run, type Evaluated } from './run';
+
+const plans = new WeakMap<Expression, Plan>();
+
+/** Universal constants that formulas on plain numbers may use by name, in SI. */
+const constants: Readonly<Record<string, number>> = { pi: Math.PI };
+
+/**
+ * Evaluates an expression on plain numbers, as relation formulas and their conditions are written.
+ * Conditions answer 1 or 0. A symbol that is not in `values` is a failure that names it.
+ */
+export function evaluateNumbers(expression: Expression, values: ReadonlyMap<string, number>): Evaluated {
+  let plan = plans.get(expression);
+  if (plan === undefined) {
+    plan = compile(expression, 0);
+    plans.set(expression, plan);
+  }
+  const inputs = new Float64Array(plan.inputs.length);
+  for (const [index, name] of plan.inputs.entries()) {
+    const value = values.get(name) ?? constants[name];
+    if (value === undefined)
+      return { ok: false, failure: { code: 'NO_VALUE', message: `${name} is not given.`, span: expression.span } };
+    inputs[index] = value;
+  }
+  return run(plan, inputs);
+}

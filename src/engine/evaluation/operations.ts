@@ -1,0 +1,27 @@
+/** Instructions of a plan. Functions of two arguments stand behind `call2Base`. */
+export const Op = {
+  constant: 0,
+  input: 1,
+  move: 2,
+  add: 3,
+  subtract: 4,
+  multiply: 5,
+  divide: 6,
+  negate: 7,
+  wholePower: 8,
+  power: 9,
+  least: 10,
+  greatest: 11,
+  less: 12,
+  lessOrEqual: 13,
+  greater: 14,
+  greaterOrEqual: 15,
+  equal: 16,
+  different: 17,
+  not: 18,
+  jump: 19,
+  jumpUnless: 20,
+  call1: 21,
+  call2Base: 64,
+} as const;
+export type Op = number;

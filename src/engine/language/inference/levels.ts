@@ -1,0 +1,32 @@
+import type { LevelCount } from './types';
+
+export function addLevels(left: LevelCount, right: LevelCount, sign: 1 | -1): LevelCount {
+  if (typeof left === 'number' && typeof right === 'number') return left + sign * right;
+  if (left === 'any' || right === 'any') return 'any';
+  if (left === 'soft' && right === 'soft') return 'soft';
+  if (right === 'soft') return left;
+  // soft + level is a level; soft - level can only be read one way by its author.
+  return sign === 1 ? right : 'any';
+}
+
+export function scaleLevels(levels: LevelCount, factor: number): LevelCount {
+  if (typeof levels !== 'number') return levels;
+  const scaled = levels * factor;
+  return Math.abs(scaled - Math.round(scaled)) < 1e-9 ? Math.round(scaled) : scaled;
+}
+
+/** A difference or one level: anything else has no meaning. */
+export function levelsMakeSense(levels: LevelCount): boolean {
+  return typeof levels !== 'number' || levels === 0 || levels === 1;
+}
+
+export function sameLevels(left: LevelCount, right: LevelCount): boolean {
+  return typeof left !== 'number' || typeof right !== 'number' || left === right;
+}
+
+/** Of alternatives: the count they share, else either. */
+export function sharedLevels(left: LevelCount, right: LevelCount): LevelCount {
+  if (left === right) return left;
+  if (left === 'soft') return right;
+  return right === 'soft' ? left : 'any';
+}

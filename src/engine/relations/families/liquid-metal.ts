@@ -1,0 +1,93 @@
+import type { RelationFamily } from '../types';
+
+export const liquidMetal: RelationFamily = {
+  id: 'liquid-metal',
+  title: 'Liquid metals',
+  geometry: 'tube',
+  relations: [
+    {
+      id: 'seban-shimazaki-1951',
+      title: 'Liquid metals in tubes, constant wall temperature',
+      authors: 'Seban & Shimazaki',
+      year: '1951',
+      inputs: [{ symbol: 'Pe', quantity: 'Peclet number Re*Pr', unit: '1' }],
+      formula: ['Nu = 5.0 + 0.025*Pe^0.8'],
+      output: { symbol: 'Nu', quantity: 'Nusselt number', unit: '1' },
+      validity: ['Pe >= 100', 'L/D > 30'],
+      validitySymbols: [
+        { symbol: 'L', quantity: 'length', unit: 'm' },
+        { symbol: 'D', quantity: 'diameter', unit: 'm' },
+      ],
+      propertyTemperature: 'bulk mean',
+      characteristicLength: 'inner diameter D',
+      wallCondition: 'constant wall temperature',
+      accuracy: '',
+      source:
+        'Seban & Shimazaki, Trans. ASME 73 (1951) 803; Incropera, DeWitt, Bergman & Lavine, Fundamentals of Heat and Mass Transfer, 6th/7th ed. (Wiley) eq. 8.65',
+      confirmed: false,
+    },
+    {
+      id: 'skupinski-1965',
+      title: 'Liquid metals in smooth tubes, constant flux',
+      authors: 'Skupinski, Tortel & Vautrey',
+      year: '1965',
+      inputs: [{ symbol: 'Pe', quantity: 'Peclet number Re*Pr', unit: '1' }],
+      formula: ['Nu = 4.82 + 0.0185*Pe^0.827'],
+      output: { symbol: 'Nu', quantity: 'Nusselt number', unit: '1' },
+      validity: ['3.6e3 <= Re <= 9.05e5', '1e2 <= Pe <= 1e4', '0.003 <= Pr <= 0.05'],
+      validitySymbols: [
+        { symbol: 'Re', quantity: 'Reynolds number', unit: '1' },
+        { symbol: 'Pr', quantity: 'Prandtl number', unit: '1' },
+      ],
+      propertyTemperature: 'bulk mean',
+      characteristicLength: 'inner diameter D',
+      wallCondition: 'constant flux',
+      accuracy: '',
+      source:
+        'Skupinski et al., Int. J. Heat Mass Transfer 8 (1965) 937; Incropera, DeWitt, Bergman & Lavine, Fundamentals of Heat and Mass Transfer, 6th/7th ed. (Wiley) eq. 8.64',
+      confirmed: false,
+    },
+    {
+      id: 'notter-sleicher-1972-const-temp',
+      title: 'Liquid metals in tubes, constant wall temperature',
+      authors: 'Notter & Sleicher',
+      year: '1972',
+      inputs: [
+        { symbol: 'Re', quantity: 'Reynolds number', unit: '1' },
+        { symbol: 'Pr', quantity: 'Prandtl number', unit: '1' },
+      ],
+      formula: ['Nu = 4.8 + 0.0156*Re^0.85*Pr^0.93'],
+      output: { symbol: 'Nu', quantity: 'Nusselt number', unit: '1' },
+      validity: ['1e4 <= Re <= 1e6', '0.004 <= Pr <= 0.1'],
+      validitySymbols: [],
+      propertyTemperature: 'bulk mean',
+      characteristicLength: 'inner diameter D',
+      wallCondition: 'constant wall temperature',
+      accuracy: '',
+      source:
+        'Notter & Sleicher, Chem. Eng. Sci. 27 (1972) 2073; Cengel, Heat and Mass Transfer: A Practical Approach, 3rd ed. (McGraw-Hill)',
+      confirmed: false,
+    },
+    {
+      id: 'plate-liquid-metal-local',
+      title: 'Laminar plate, low Prandtl number limit, local',
+      authors: 'Kays & Crawford',
+      year: '',
+      inputs: [
+        { symbol: 'Re', quantity: 'Reynolds number', unit: '1' },
+        { symbol: 'Pr', quantity: 'Prandtl number', unit: '1' },
+      ],
+      formula: ['Nu = 0.565*sqrt(Re*Pr)'],
+      output: { symbol: 'Nu', quantity: 'Nusselt number', unit: '1' },
+      validity: ['Pr <= 0.05', 'Re*Pr >= 100', 'Re <= 5e5'],
+      validitySymbols: [],
+      propertyTemperature: 'film',
+      characteristicLength: 'distance x from the leading edge',
+      wallCondition: 'constant wall temperature',
+      accuracy: 'exact limit 1/sqrt(pi)',
+      source:
+        'Incropera, DeWitt, Bergman & Lavine, Fundamentals of Heat and Mass Transfer, 6th/7th ed. (Wiley) eq. 7.32',
+      confirmed: true,
+    },
+  ],
+};
