@@ -8,19 +8,30 @@ function readCalculation(file: string) {
   const parsed = exchangeSchema.safeParse(JSON.parse(readFileSync(file, 'utf8')));
   if (parsed.success) return parsed.data;
   const [issue] = parsed.error.issues;
-  throw new Error(`it is no calculation in the exchange format: ${issue?.path.join('.') ?? ''} ${issue?.message ?? ''}`);
+  throw new Error(
+    `it is no calculation in the exchange format: ${issue?.path.join('.') ?? ''} ${issue?.message ?? ''}`,
+  );
 }
 
 function report(cells: readonly CellInput[], result: CalculationResult) {
   const names = Object.fromEntries(
-    result.names.map(({ name, value }) => [name, value === undefined ? null : { si: value.si, unit: value.siUnit, shown: `${value.text} ${value.unit}`.trim() }]),
+    result.names.map(({ name, value }) => [
+      name,
+      value === undefined ? null : { si: value.si, unit: value.siUnit, shown: `${value.text} ${value.unit}`.trim() },
+    ]),
   );
   const results = cells.flatMap((cell) => result.cells[cell.id] ?? []);
   const requirements = results.flatMap((cell) =>
-    cell.lines.filter((line) => line.kind === 'require').map((line) => ({ cell: cell.id, line: line.line, satisfied: line.satisfied ?? null })),
+    cell.lines
+      .filter((line) => line.kind === 'require')
+      .map((line) => ({ cell: cell.id, line: line.line, satisfied: line.satisfied ?? null })),
   );
-  const diagnostics = results.flatMap((cell) => cell.diagnostics.map(({ severity, code, message, span }) => ({ cell: cell.id, severity, code, message, span })));
-  const outsideRange = results.filter((cell) => cell.outsideRange.length > 0).map((cell) => ({ cell: cell.id, becauseOf: cell.outsideRange }));
+  const diagnostics = results.flatMap((cell) =>
+    cell.diagnostics.map(({ severity, code, message, span }) => ({ cell: cell.id, severity, code, message, span })),
+  );
+  const outsideRange = results
+    .filter((cell) => cell.outsideRange.length > 0)
+    .map((cell) => ({ cell: cell.id, becauseOf: cell.outsideRange }));
   return { names, requirements, diagnostics, outsideRange };
 }
 

@@ -1,8 +1,11 @@
 import {
   evaluateRelation,
+  expressionLatex,
   findRelation,
   listFamilies,
+  readRelation,
   resolveUnit,
+  symbolLatex,
   validityOf,
   worstGrade,
   type Geometry,
@@ -105,4 +108,22 @@ export function bindingLines(relation: Relation, before: string, beforeId: strin
   const bindings = own.map((symbol) => bound.get(symbol) ?? `${symbol} = `);
   const beneath = lines.filter((line) => !own.includes(nameOf(line)) && !oldSymbols.has(nameOf(line)));
   return [...bindings, ...beneath].join('\n');
+}
+
+/** The formula lines of a relation as mathematics. */
+export function formulaLatex(relation: Relation): string[] {
+  return readRelation(relation).formula.map((line) =>
+    line.kind === 'assignment'
+      ? `${symbolLatex(line.symbol)} = ${expressionLatex(line.expression)}`
+      : `${symbolLatex(line.symbol)}:\\ ${expressionLatex(line.equation)} = 0`,
+  );
+}
+
+/** The result with the values at hand, to four figures: enough to compare. */
+export function outputText({ relation, output }: RelationCandidate): string {
+  if (output === undefined) return '';
+  const figure = String(Number(output.toPrecision(4)));
+  const [whole = '', decimals] = figure.replace('-', '−').split('.');
+  const parted = whole.replace(/\B(?=(\d{3})+(?!\d))/g, '\u00a0') + (decimals === undefined ? '' : `.${decimals}`);
+  return relation.output.unit === '1' ? parted : `${parted} ${relation.output.unit}`;
 }

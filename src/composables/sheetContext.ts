@@ -1,4 +1,6 @@
 import { inject, provide, type InjectionKey, type Ref } from 'vue';
+import type { Awareness } from 'y-protocols/awareness';
+import type * as Y from 'yjs';
 import type { Act, Remark, Tick } from '#contract';
 import type { CellInput, CellKind, CellResult, CellSettings, NamedValue } from '#engine';
 
@@ -43,6 +45,13 @@ export interface SheetCommands {
   toggleTick(id: string): void;
 }
 
+/** What editors need of the shared document. */
+export interface SharedText {
+  textOf(id: string): Y.Text | undefined;
+  awareness: Awareness | undefined;
+  undoManager: Y.UndoManager | undefined;
+}
+
 /** What the parts of the sheet share. */
 export interface SheetContext {
   letter: Readonly<Ref<string>>;
@@ -67,8 +76,14 @@ export interface SheetContext {
   /** Sentences: what a lapsed tick stood for and what is there now. */
   changesSinceTick(id: string): string[];
   cellOfName(name: string): SheetCell | undefined;
+  /** Marks what a cell uses and what follows from it; `pin` holds the marks. */
   point(id: string | undefined, pin?: boolean): void;
+  /** The focus has come to a cell by itself. */
+  attend(id: string): void;
   commands: SheetCommands;
+  shared: SharedText;
+  /** The editor that is open at this screen, so that pressed names can be put into it. */
+  registerEditor(insert: ((text: string) => void) | undefined): void;
 }
 
 const key: InjectionKey<SheetContext> = Symbol('sheet');

@@ -15,12 +15,7 @@ const names: Readonly<Record<string, string>> = { Up: 'ArrowUp', Down: 'ArrowDow
 /** The name of what was pressed, in the way shortcuts are written. */
 export function pressedKeys(event: KeyboardEvent): string {
   const key = event.key.length === 1 ? event.key.toUpperCase() : event.key;
-  return [
-    event.ctrlKey || event.metaKey ? 'Ctrl' : '',
-    event.altKey ? 'Alt' : '',
-    event.shiftKey ? 'Shift' : '',
-    key,
-  ]
+  return [event.ctrlKey || event.metaKey ? 'Ctrl' : '', event.altKey ? 'Alt' : '', event.shiftKey ? 'Shift' : '', key]
     .filter((part) => part !== '')
     .join('+');
 }

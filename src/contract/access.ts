@@ -41,7 +41,8 @@ export const accessTable: Readonly<Record<Act, AccessRow>> = {
   'remark.answer': { roles: ['engineer', 'checker', 'lead'], states: unlocked },
   'remark.close': { roles: ['checker', 'lead'], states: unlocked },
   'tick.set': { roles: ['checker'], states: open },
-  'revision.handOver': { roles: ['engineer'], states: ['draft'] },
+  // While it is checked, a correction voids the signature; handing over again signs anew.
+  'revision.handOver': { roles: ['engineer'], states: open },
   'revision.return': { roles: ['checker', 'lead'], states: ['for check', 'checked'] },
   'revision.check': { roles: ['checker'], states: ['for check'] },
   'revision.lock': { roles: ['lead'], states: ['checked'] },

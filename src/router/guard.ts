@@ -1,14 +1,10 @@
 import type { RouteLocationNormalized, RouteLocationRaw } from 'vue-router';
+import { returnAddress } from 'src/composables/returnAddress';
 
 interface Session {
   signedIn: boolean;
   administrator: boolean;
   load(): Promise<void>;
-}
-
-/** An address of this application to go to after signing in; anything else is not followed. */
-export function returnAddress(asked: unknown): string {
-  return typeof asked === 'string' && /^\/(?![/\\])/.test(asked) ? asked : '/projects';
 }
 
 /** Who is not signed in goes to the sign-in page, and comes back to where he or she wanted. */

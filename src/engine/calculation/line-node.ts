@@ -1,5 +1,5 @@
 import type { Diagnostic } from '../errors/diagnostic';
-import { expressionLatex, literalOf, symbolLatex, type Line } from '../language/index';
+import { expressionLatex, hiddenNameHints, literalOf, symbolLatex, type Line } from '../language/index';
 import { describe, type Inferred } from '../language/inference';
 import { plainUnit, quantityName, sameDimension, type ResolvedUnit } from '../units/index';
 import { dependenciesOf, evaluateExpression } from './expression';
@@ -62,43 +62,6 @@ function emptyResult(line: Line): LineResult {
   };
 }
 
-function unitHint(line: Line, surroundings: Surroundings): Diagnostic[] {
-  const unit = line.expression === undefined ? undefined : hiddenName(line, surroundings);
-  return unit === undefined ? [] : [unit];
-}
-
-/** `5 kW/m` with a name m: right by the rule, but the reader should know. */
-function hiddenName(line: Line, surroundings: Surroundings): Diagnostic | undefined {
-  const texts = unitTextsOf(line);
-  for (const { text, span } of texts) {
-    if (!/[/*·]/.test(text)) continue;
-    const word = text.split(/[^A-Za-z_]+/).find((part) => part !== '' && surroundings.symbol(part) !== undefined);
-    if (word === undefined) continue;
-    return {
-      code: 'UNIT_OR_NAME',
-      severity: 'hint',
-      message: `${word} in "${text}" is the unit. For the value named ${word} put the literal in parentheses.`,
-      span,
-    };
-  }
-  return undefined;
-}
-
-function unitTextsOf(line: Line): { text: string; span: { from: number; to: number } }[] {
-  const found: { text: string; span: { from: number; to: number } }[] = [];
-  const visit = (node: NonNullable<Line['expression']>): void => {
-    if (node.type === 'number' && node.unit !== undefined)
-      found.push({ text: node.unit.unit.text, span: node.unit.span });
-    else if (node.type === 'group') visit(node.inner);
-    else if (node.type === 'unary') visit(node.operand);
-    else if (node.type === 'binary' || node.type === 'logical') [node.left, node.right].forEach(visit);
-    else if (node.type === 'comparison') node.operands.forEach(visit);
-    else if (node.type === 'call') node.arguments.forEach(visit);
-  };
-  if (line.expression !== undefined) visit(line.expression);
-  return found;
-}
-
 function computeLine(line: Line, uses: readonly string[], surroundings: Surroundings): Outcome {
   const result = emptyResult(line);
   const symbol: Symbol = {};
@@ -111,8 +74,9 @@ function computeLine(line: Line, uses: readonly string[], surroundings: Surround
   const unreadable = line.diagnostics.some((diagnostic) => diagnostic.severity === 'error');
   if (line.expression === undefined || unreadable) return outcome();
 
+  const isName = (word: string) => surroundings.symbol(word) !== undefined;
   const evaluated = evaluateExpression(line.expression, surroundings);
-  result.diagnostics.push(...evaluated.diagnostics, ...unitHint(line, surroundings));
+  result.diagnostics.push(...evaluated.diagnostics, ...hiddenNameHints(line, isName));
   result.waitsFor = evaluated.waitsFor;
   result.outsideRange = [...new Set(uses.flatMap((name) => surroundings.outsideBehind(name)))];
   if (evaluated.type === undefined) return outcome();

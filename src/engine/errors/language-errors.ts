@@ -40,6 +40,13 @@ const table = {
     'warning',
     '{unit} is read from left to right, as {display}. Write {mended} to divide by all that follows.',
   ],
+  UNIT_OR_NAME: [
+    'hint',
+    '{word} in {unit} is the unit, not the value named {word}. To take the value, write {mended}.',
+  ],
+  GAUGE_NOTATION: ['error', 'Gauge pressure is written {mended}, with the g at the unit.'],
+  ABSOLUTE_NOTATION: ['error', 'Pressure is absolute unless it is gauge; write {mended}.'],
+  DEGREE_NOTATION: ['error', '{unit} is read as degree times {letter}; the temperature is written {mended}.'],
   FRACTION_BEFORE_UNIT: [
     'hint',
     '{above}/{below} {unit} is read as {above}/({below} {unit}). For a fraction of one {unit} write ({above}/{below})*1 {unit}.',

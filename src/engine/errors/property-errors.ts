@@ -18,7 +18,11 @@ export type PropertyErrorCode =
   | 'WARN_HIGH_T_DISSOCIATION';
 
 /** A reason with its sentence; codes that begin with WARN stand beside a value that is given. */
-export function propertyError(code: PropertyErrorCode, message: string, parameters: Record<string, string | number> = {}): Diagnostic {
+export function propertyError(
+  code: PropertyErrorCode,
+  message: string,
+  parameters: Record<string, string | number> = {},
+): Diagnostic {
   return { code, severity: code.startsWith('WARN') ? 'warning' : 'error', message, parameters };
 }
 
@@ -32,12 +36,25 @@ export const bars = (p: number): string => `${shown(p / 1e5, 4)} bar`;
 /** A temperature outside a formulation, with the nearest that it covers. */
 export function temperatureOutside(T: number, [low, high]: readonly [number, number], formulation: string): Diagnostic {
   const nearest = T < low ? low : high;
-  return propertyError('OUT_OF_RANGE_T', `${celsius(T)} is outside ${formulation}, which covers ${celsius(low)} to ${celsius(high)}. Nearest: ${celsius(nearest)}.`, { T, low, high, nearest });
+  return propertyError(
+    'OUT_OF_RANGE_T',
+    `${celsius(T)} is outside ${formulation}, which covers ${celsius(low)} to ${celsius(high)}. Nearest: ${celsius(nearest)}.`,
+    { T, low, high, nearest },
+  );
 }
 
 /** A pressure outside a formulation, with the nearest that it covers. */
 export function pressureOutside(p: number, [low, high]: readonly [number, number], formulation: string): Diagnostic {
-  if (p <= 0) return propertyError('NOT_ABSOLUTE', `A pressure of ${bars(p)} is not absolute: absolute pressures are above zero. Gauge pressures are written in barg or psig.`, { p });
+  if (p <= 0)
+    return propertyError(
+      'NOT_ABSOLUTE',
+      `A pressure of ${bars(p)} is not absolute: absolute pressures are above zero. Gauge pressures are written in barg or psig.`,
+      { p },
+    );
   const nearest = p < low ? low : high;
-  return propertyError('OUT_OF_RANGE_P', `${bars(p)} is outside ${formulation}, which covers ${bars(low)} to ${bars(high)}. Nearest: ${bars(nearest)}.`, { p, low, high, nearest });
+  return propertyError(
+    'OUT_OF_RANGE_P',
+    `${bars(p)} is outside ${formulation}, which covers ${bars(low)} to ${bars(high)}. Nearest: ${bars(nearest)}.`,
+    { p, low, high, nearest },
+  );
 }

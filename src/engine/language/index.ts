@@ -3,6 +3,7 @@ export { goesOn, splitLines, type SourceLine } from './lines';
 export { canonicalName, greekLetters } from './names';
 export { formatExpression } from './print';
 export { deepestNesting, longestLine, readExpressionText, readLines } from './read';
+export { hiddenNameHints } from './reading/hidden-names';
 export type * from './tree';
 export { conditionLatex, expressionLatex, figuresLatex, substitutedLatex, type Piece } from './typeset/expression';
 export { memberLatex, symbolLatex } from './typeset/symbol';

@@ -22,10 +22,10 @@ const kinds: Readonly<Record<string, Line['kind']>> = {
 };
 
 function readStatement(reading: Reading, line: Line, node: SyntaxNode): void {
-  const definition = node.getChild('Definition');
+  const definition = node.getChild('Definition')?.getChild('Name');
   line.kind = kinds[node.name] ?? 'expression';
   line.span = reading.span(node);
-  if (definition !== null) {
+  if (definition) {
     line.name = canonicalName(reading.text(definition));
     line.nameSpan = reading.span(definition);
   }

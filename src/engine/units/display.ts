@@ -1,7 +1,10 @@
 import { isDimensionless } from './dimension';
+import { figure, shownFigures, type Figure } from './figures';
 import { shownUnit, siUnitText } from './quantities';
 import { plainUnit, resolveUnit } from './resolve';
 import type { Dimension, DisplayedValue, ResolvedUnit } from './types';
+
+export { figure } from './figures';
 
 export interface DisplayOptions {
   unitSystem: 'SI' | 'US';
@@ -12,64 +15,10 @@ export interface DisplayOptions {
   level?: boolean;
   /** Unit asked for by the line. */
   target?: ResolvedUnit | undefined;
+  /** Unit taken when the line asks for none, where it measures the same: that of a lone literal. */
+  preferredUnit?: ResolvedUnit | undefined;
   /** Figures as written, for a line that is only a literal. */
   figures?: string | undefined;
-}
-
-const superscript: Readonly<Record<string, string>> = {
-  '-': '⁻',
-  0: '⁰',
-  1: '¹',
-  2: '²',
-  3: '³',
-  4: '⁴',
-  5: '⁵',
-  6: '⁶',
-  7: '⁷',
-  8: '⁸',
-  9: '⁹',
-};
-const raised = (power: number) => [...String(power)].map((sign) => superscript[sign] ?? sign).join('');
-
-/** Parts thousands of the whole part by a no-break space (ISO 80000-1, 7.3.1). */
-function partThousands(whole: string): string {
-  return whole.replace(/\B(?=(\d{3})+(?!\d))/g, '\u00a0');
-}
-
-interface Figure {
-  whole: string;
-  fraction: string;
-}
-
-/** A number to `digits` significant digits, as decimal figure or with a power of ten. */
-export function figure(value: number, digits: number): Figure {
-  if (value === 0) return { whole: '0', fraction: '' };
-  const [mantissa = '0', power = '0'] = value.toExponential(digits - 1).split('e');
-  const exponent = Number(power);
-  if (exponent < -4 || exponent > 8) {
-    const [whole = '0', decimals] = mantissa.split('.');
-    return {
-      whole: whole.replace('-', '−'),
-      fraction: `${decimals === undefined ? '' : `.${decimals}`}×10${raised(exponent)}`,
-    };
-  }
-  const plain =
-    exponent >= digits
-      ? String(BigInt(Math.round(Number(`${mantissa}e${exponent}`))))
-      : Number(`${mantissa}e${exponent}`).toFixed(Math.max(0, digits - 1 - exponent));
-  return split(plain);
-}
-
-function split(plain: string): Figure {
-  const [whole = '0', decimals] = plain.replace('-', '−').split('.');
-  return { whole: partThousands(whole), fraction: decimals === undefined ? '' : `.${decimals}` };
-}
-
-function unitFor(si: number, dimension: Dimension, options: DisplayOptions): ResolvedUnit {
-  if (options.target !== undefined) return options.target;
-  if (isDimensionless(dimension)) return plainUnit;
-  if (options.level === true) return levelUnits[options.unitSystem];
-  return shownUnit(dimension, si, options.unitSystem);
 }
 
 const levelUnits = { SI: need('degC'), US: need('degF') };
@@ -78,6 +27,19 @@ function need(text: string): ResolvedUnit {
   const unit = resolveUnit(text);
   if (unit === undefined) throw new Error(`no unit ${text}`);
   return unit;
+}
+
+function measuresSame(unit: ResolvedUnit, dimension: Dimension): boolean {
+  return unit.dimension.every((exponent, index) => exponent === dimension[index]);
+}
+
+function unitFor(si: number, dimension: Dimension, options: DisplayOptions): ResolvedUnit {
+  if (options.target !== undefined) return options.target;
+  if (options.preferredUnit !== undefined && measuresSame(options.preferredUnit, dimension))
+    return options.preferredUnit;
+  if (isDimensionless(dimension)) return plainUnit;
+  if (options.level === true) return levelUnits[options.unitSystem];
+  return shownUnit(dimension, si, options.unitSystem);
 }
 
 /** SI value → number in a unit; gauge units count from ambient pressure. */
@@ -91,13 +53,25 @@ export function fromUnit(value: number, unit: ResolvedUnit, ambientPressure: num
   return value * unit.factor + (unit.level === 'gauge pressure' ? ambientPressure : unit.offset);
 }
 
+/** A value that is not finite never reaches a sheet; whoever asks for it has skipped an error. */
+function shownValue(value: number, unit: ResolvedUnit, options: DisplayOptions): Figure {
+  if (!Number.isFinite(value)) throw new Error(`a value that is no number cannot be shown: ${value} ${unit.display}`);
+  if (options.figures !== undefined) return shownFigures(options.figures);
+  if (unit.level === 'temperature') return levelFigure(value, options.significantDigits);
+  return isCount(value, unit, options.significantDigits)
+    ? shownFigures(String(value))
+    : figure(value, options.significantDigits);
+}
+
+/** Whole plain numbers are counts (62 tubes): they get no decimals. */
+function isCount(value: number, unit: ResolvedUnit, digits: number): boolean {
+  return unit === plainUnit && Number.isInteger(value) && Math.abs(value) < 10 ** digits;
+}
+
 /** A quantity as it is shown: unit by request, else by profile and size; figures to the digits asked for. */
 export function displayValue(si: number, dimension: Dimension, options: DisplayOptions): DisplayedValue {
   const unit = unitFor(si, dimension, options);
-  const value = inUnit(si, unit, options.ambientPressure);
-  const digits =
-    unit.level === 'temperature' ? levelDigits(value, options.significantDigits) : options.significantDigits;
-  const shown = options.figures === undefined ? figure(value, digits) : split(options.figures);
+  const shown = shownValue(inUnit(si, unit, options.ambientPressure), unit, options);
   return {
     si,
     siUnit: siUnitText(dimension),
@@ -111,11 +85,13 @@ export function displayValue(si: number, dimension: Dimension, options: DisplayO
   };
 }
 
-/** Levels near zero keep the decimals that others have: 4.0 °C beside 82.00 °C, not 4.000 °C. */
-function levelDigits(value: number, digits: number): number {
+/** Levels near zero keep the decimals that others have: 4.00 °C beside 82.00 °C, not 4.000 °C. */
+function levelFigure(value: number, digits: number): Figure {
   const size = Math.abs(value);
-  const whole = size < 1 ? 0 : Math.floor(Math.log10(size)) + 1;
-  return Math.max(1, Math.min(digits, whole + Math.max(1, digits - 2)));
+  const whole = size < 1 ? 1 : Math.floor(Math.log10(size)) + 1;
+  const decimals = Math.max(0, Math.min(digits - whole, digits - 2));
+  const rounded = Number(value.toFixed(decimals));
+  return rounded === 0 ? shownFigures((0).toFixed(decimals)) : shownFigures(value.toFixed(decimals));
 }
 
 export function displayTruth(value: boolean): DisplayedValue {

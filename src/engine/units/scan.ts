@@ -20,7 +20,7 @@ export interface ScannedFactors {
 const deepest = 8;
 const largestExponent = 24;
 
-const word = /[\p{L}°%‰′″€℃℉][\p{L}\d_°₂]*/uy;
+const word = /[\p{L}°%‰′″€£℃℉][\p{L}\d_°₂€£]*/uy;
 const exponentPattern =
   /\s*\^\s*(?:([-−+]?\d+(?:\.\d+)?)(?![\d.])|\(\s*([-−+]?\d+(?:\.\d+)?)\s*(?:\/\s*(\d+)\s*)?\))/uy;
 const raisedPattern = /[⁻⁰¹²³⁴⁵⁶⁷⁸⁹]+/uy;

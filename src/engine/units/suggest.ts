@@ -45,7 +45,10 @@ const slips: Readonly<Record<string, string>> = {
   ton: 't',
   kts: 'kn',
   pct: '%',
-  USD: 'EUR',
+  $: 'USD',
+  dollar: 'USD',
+  euro: 'EUR',
+  euros: 'EUR',
   years: 'yr',
 };
 
@@ -121,7 +124,7 @@ export interface UnitProblem {
 export function unitProblem(text: string): UnitProblem | undefined {
   const trimmed = text.trim();
   if (resolveUnit(trimmed) !== undefined) return undefined;
-  const words = trimmed.match(/[\p{L}°%‰′″€℃℉][\p{L}\d_°₂]*/gu) ?? [];
+  const words = trimmed.match(/[\p{L}°%‰′″€£℃℉][\p{L}\d_°₂€£]*/gu) ?? [];
   for (const word of words) {
     if (resolveUnit(word) !== undefined) continue;
     const reason = lookUp(refused, word);
@@ -140,6 +143,6 @@ export function unitProblem(text: string): UnitProblem | undefined {
 export function unitProblemAt(text: string): UnitProblem | undefined {
   const scanned = scanFactors(text, 0);
   if (scanned !== undefined) return unitProblem(text.slice(0, scanned.end));
-  const word = /^[\p{L}°%‰′″€℃℉][\p{L}\d_°₂]*/u.exec(text)?.[0];
+  const word = /^[\p{L}°%‰′″€£℃℉][\p{L}\d_°₂€£]*/u.exec(text)?.[0];
   return word === undefined ? undefined : unitProblem(word);
 }

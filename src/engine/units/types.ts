@@ -13,7 +13,11 @@ export const baseQuantities = [
   'current',
   'luminosity',
   'angle',
+  // Money is a plain dimension, each currency its own: no rate of exchange is ever assumed.
   'currency',
+  'US dollar',
+  'pound sterling',
+  'Swiss franc',
 ] as const;
 export const dimensionDenominator = 12;
 

@@ -54,25 +54,28 @@ const plainStyle: Style = {
   dot: '·',
 };
 
-/** A unit name upright in mathematics. */
+/** Signs of unit names in mathematics. KaTeX's \\mu is italic, so the micro sign is set as text. */
+const latexSigns: Readonly<Record<string, string>> = {
+  ' ': '\\ ',
+  '%': '\\%',
+  '‰': '\\text{‰}',
+  '°': '{^\\circ}',
+  µ: '\\text{µ}',
+  Ω: '\\Omega ',
+  Å: '\\text{Å}',
+  Δ: '\\Delta ',
+  '′': "{'}",
+  '″': "{''}",
+  '₂': '_2',
+  ₙ: '_n',
+  '·': '{\\cdot}',
+  '²': '^{2}',
+  '³': '^{3}',
+  '⁶': '^{6}',
+};
+
 function latexName(shown: string): string {
-  return shown
-    .replace(/%/g, '\\%')
-    .replace(/‰/g, '\\text{‰}')
-    .replace(/°/g, '{^\\circ}')
-    .replace(/µ/g, '\\text{µ}')
-    .replace(/Ω/g, '\\Omega ')
-    .replace(/Å/g, '\\text{Å}')
-    .replace(/Δ/g, '\\Delta ')
-    .replace(/′/g, "{'}")
-    .replace(/″/g, "{''}")
-    .replace(/₂/g, '_2')
-    .replace(/ₙ/g, '_n')
-    .replace(/·/g, '{\\cdot}')
-    .replace(/²/g, '^{2}')
-    .replace(/³/g, '^{3}')
-    .replace(/⁶/g, '^{6}')
-    .replace(/ /g, '\\ ');
+  return [...shown].map((sign) => latexSigns[sign] ?? sign).join('');
 }
 
 const latexStyle: Style = {

@@ -6,7 +6,7 @@ import { loweredFigures, readLiteral } from './literal';
 import type { Reading } from './reading';
 
 /** Deeper nesting than this is refused: no calculation needs it, and a stack has an end. */
-export const deepestNesting = 100;
+export const deepestNesting = 250;
 
 export class TooDeep extends Error {}
 
@@ -59,8 +59,14 @@ function inner(reading: Reading, node: SyntaxNode, depth: number): Expression {
   return { type: 'missing', span: reading.span(node) };
 }
 
+/** x²^3 is (x²)^3: the group says so in print, too. */
+function grouped(base: Expression): Expression {
+  return base.type === 'binary' && base.operator === '^' ? { type: 'group', span: base.span, inner: base } : base;
+}
+
 const readBinary: Reader = (reading, node, depth) => {
-  const [left, right] = operands(reading, node, depth);
+  const [first, right] = operands(reading, node, depth);
+  const left = node.name === 'Power' ? grouped(first) : first;
   const sign = childrenOf(node).find((child) => signNodes.has(child.name));
   const operator = plain(sign === undefined ? '+' : reading.text(sign)) as BinaryNode['operator'];
   return { type: 'binary', span: reading.span(node), operator, left, right };
@@ -70,7 +76,8 @@ const readPower: Reader = (reading, node, depth) => {
   const raised = node.getChild('Raised');
   if (raised === null) return readBinary(reading, node, depth);
   const text = loweredFigures(reading.text(raised));
-  const [left] = operands(reading, node, depth);
+  const [base] = operands(reading, node, depth);
+  const left: Expression = grouped(base);
   const figures = text.replace('-', '');
   const value: Expression = { type: 'number', span: reading.span(raised), value: Number(figures), text: figures };
   const right: Expression = text.startsWith('-')

@@ -60,8 +60,28 @@ function literalHints(number: Leaf, unit: Leaf, reading: Reading): Diagnostic[] 
   if (unit.text === 'C')
     return [languageDiagnostic('COULOMB', span, {}, { label: 'Write degC', span, insert: 'degC' })];
   if (unit.text === 'F') return [languageDiagnostic('FARAD', span, {}, { label: 'Write degF', span, insert: 'degF' })];
+  const notation = notationProblem(unit.text);
+  if (notation !== undefined) {
+    const { code, mended, letter } = notation;
+    const mend = { label: `Write ${mended}`, span, insert: mended };
+    return [languageDiagnostic(code, span, { unit: unit.text, mended, letter }, mend)];
+  }
   if (unit.text !== 'rpm') return [];
   const value = String(Number(((Number(plainFigures(number.text)) * 2 * Math.PI) / 60).toPrecision(5)));
   const parameters = { number: number.text, value };
   return [languageDiagnostic('REVOLUTIONS', span, parameters, { label: 'Write 1/min', span, insert: '1/min' })];
+}
+
+const pressures = 'm?bar|[kM]?Pa|psi|at|inH2O|inHg';
+const letterNames: Readonly<Record<string, string>> = { C: 'coulomb', F: 'farad', K: 'kelvin' };
+
+/** Products of units that nobody means: `bar g` is gauge pressure, `deg C` a temperature. */
+function notationProblem(
+  unit: string,
+): { code: 'GAUGE_NOTATION' | 'DEGREE_NOTATION'; mended: string; letter: string } | undefined {
+  const gauge = new RegExp(`^(${pressures})\\s+g$`).exec(unit)?.[1];
+  if (gauge !== undefined) return { code: 'GAUGE_NOTATION', mended: `${gauge}g`, letter: 'gram' };
+  const letter = /^(?:deg|°)\s*[·*]?\s*([CFK])$/.exec(unit)?.[1];
+  if (letter === undefined || /^°[CF]$/.test(unit)) return undefined;
+  return { code: 'DEGREE_NOTATION', mended: letter === 'K' ? 'K' : `deg${letter}`, letter: letterNames[letter] ?? '' };
 }

@@ -7,7 +7,7 @@ import { wordBehindNumber } from './problems-units';
 const endsOperand = new Set(['Number', 'Unit', 'Name', 'Member', ')', 'Coverage', 'Raised']);
 const beginsOperand = new Set(['Number', 'Name', 'Member', '(']);
 const binarySigns = new Set(['Times', 'Divide', 'Caret', 'Compare', 'AndSign', 'OrSign', 'Plus', 'Minus']);
-const needsRight = new Set([...binarySigns, 'NotSign', 'PlusMinus', 'Equals', 'Require']);
+const needsRight = new Set([...binarySigns, 'NotSign', 'PlusMinus']);
 /** What may stand before an operand that has a sign of its own. */
 const signs = new Set(['Plus', 'Minus', 'NotSign']);
 
@@ -21,10 +21,27 @@ export function missingSign(search: Search): Diagnostic | undefined {
       if (unit !== undefined) return unit;
     }
     if (right === undefined || !endsOperand.has(left.name) || !beginsOperand.has(right.name)) continue;
+    const notation = left.name === 'Unit' ? pressureNotation(leaves, index, search) : undefined;
+    if (notation !== undefined) return notation;
     const called = /^(Name|Member)$/.test(left.name) && right.name === '(';
     if (!called) return sideBySide(leaves, index, search);
   }
   return undefined;
+}
+
+/** `3 bar(g)`, `3 bar (abs)`, `3 bar a`: notations of other systems. */
+function pressureNotation(leaves: readonly Leaf[], index: number, { reading }: Search): Diagnostic | undefined {
+  const unit = leaves[index];
+  if (unit === undefined) return undefined;
+  const behind = /^\s*(?:\(\s*(g|a|abs|gauge)\s*\)|(abs|gauge|a)\b)/.exec(reading.source.slice(unit.span.to));
+  const kind = behind?.[1] ?? behind?.[2];
+  const known = /^(m?bar|[kM]?Pa|psi|at|inH2O|inHg)$/.test(unit.text);
+  if (behind === null || kind === undefined || !known) return undefined;
+  const gauge = kind.startsWith('g');
+  const mended = gauge ? `${unit.text}g` : unit.text;
+  const span = reading.span({ from: unit.span.from, to: unit.span.to + behind[0].length });
+  const mend = { label: `Write ${mended}`, span, insert: mended };
+  return languageDiagnostic(gauge ? 'GAUGE_NOTATION' : 'ABSOLUTE_NOTATION', span, { mended }, mend);
 }
 
 /** The left operand as it is to be written before a sign: a literal with its unit in parentheses. */

@@ -17,11 +17,13 @@ const instead: Readonly<Record<string, string>> = {
   '|': 'or',
   '∑': 'sum( )',
   ';': 'a new line',
-  $: 'EUR',
+  $: 'USD directly behind a number',
   '~': '==',
   '≈': '==',
   '≡': '==',
   '%': 'a unit % directly behind a number',
+  "'": 'ft directly behind a number',
+  '"': 'in directly behind a number',
   '°': 'degC directly behind a number',
 };
 
@@ -35,7 +37,7 @@ export function unknownSign({ leaves, reading }: Search): Diagnostic | undefined
     }
     if (leaf.name !== '⚠') continue;
     const sign = /^\s*(\P{L})/u.exec(leaf.text)?.[1];
-    if (sign === undefined || /[\s\d]/.test(sign) || behindNumber(leaves, index)) continue;
+    if (sign === undefined || /[\s\d±]/.test(sign) || behindNumber(leaves, index)) continue;
     const span = reading.span(leaf.span);
     if (sign === ':' && next?.name === 'Equals') {
       const parameters = { sign: '":="', instead: '=' };
@@ -52,7 +54,7 @@ export function unknownSign({ leaves, reading }: Search): Diagnostic | undefined
 
 /** Behind a number a sign such as ° begins a word that is meant as a unit. */
 function behindNumber(leaves: readonly Leaf[], index: number): boolean {
-  return leaves[index - 1]?.name === 'Number' && /^[°%‰′″€℃℉]/.test(leaves[index]?.text ?? '');
+  return leaves[index - 1]?.name === 'Number' && /^[°%‰′″€£℃℉]/.test(leaves[index]?.text ?? '');
 }
 
 /** Parentheses that do not pair. */
@@ -70,7 +72,9 @@ export function parenthesisProblem({ leaves, reading }: Search): Diagnostic | un
   }
   const [first] = open;
   if (first === undefined) return undefined;
-  const end = reading.span({ from: leaves.at(-1)?.span.to ?? 0, to: leaves.at(-1)?.span.to ?? 0 });
+  const last = leaves.at(-1);
+  if (last?.name === '(') return languageDiagnostic('UNCLOSED', reading.span(first.span));
+  const end = reading.span({ from: last?.span.to ?? 0, to: last?.span.to ?? 0 });
   const mend = { label: 'Close it at the end', span: end, insert: ')'.repeat(open.length) };
   return languageDiagnostic('UNCLOSED', reading.span(first.span), {}, mend);
 }

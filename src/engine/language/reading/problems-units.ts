@@ -4,7 +4,7 @@ import { unitProblem, unitProblemAt } from '../../units/suggest';
 import type { Leaf } from './leaves';
 import type { Search } from './problems';
 
-const unitWord = /^\s*([\p{L}°%‰′″€℃℉][\p{L}\p{M}\d_°₂]*)/u;
+const unitWord = /^\s*([\p{L}°%‰′″€£℃℉][\p{L}\p{M}\d_°₂]*)/u;
 const languageWords = new Set(['to', 'and', 'or', 'not']);
 
 /** A word behind a number that is no unit: a slip in a unit, or a sign left out. */

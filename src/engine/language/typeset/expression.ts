@@ -8,7 +8,7 @@ import type {
   NumberNode,
   UnaryNode,
 } from '../tree';
-import { ungrouped } from '../walk';
+import { literalOf, ungrouped } from '../walk';
 import { callPart } from './call';
 import { figuresLatex } from './figures';
 import { rank, wrap, type Typeset } from './rank';
@@ -74,14 +74,15 @@ function exponentLatex(expression: Expression, setting: Setting): string {
   return `${wrap(partOf(inner.left, setting), rank.sign)}/${wrap(partOf(inner.right, setting), rank.fraction)}`;
 }
 
-function startsWithFigure(latex: string): boolean {
-  return /^(?:\\left\()?-?[\d.]/.test(latex);
+/** Before figures a thin space would not be seen as a sign. */
+function beginsWithFigures(expression: Expression, latex: string): boolean {
+  return /^\d/.test(latex) || (latex.startsWith('\\left(') && literalOf(expression) !== undefined);
 }
 
 function productPart(node: BinaryNode, setting: Setting): Typeset {
   const left = partOf(node.left, setting);
   const right = wrap(partOf(node.right, setting), rank.product);
-  const sign = setting.cross || startsWithFigure(right) ? '\\times ' : '\\,';
+  const sign = setting.cross || beginsWithFigures(node.right, right) ? '\\times ' : '\\,';
   const leading = left.rank === rank.sign;
   return { latex: `${wrap(left, rank.sign)}${sign}${right}`, rank: leading ? rank.sign : rank.product };
 }
@@ -106,7 +107,9 @@ function binaryPart(node: BinaryNode, setting: Setting): Typeset {
     }
     case '^': {
       const base = wrap(partOf(node.left, setting), rank.atom);
-      return { latex: `{${base}}^{${exponentLatex(node.right, setting)}}`, rank: rank.power };
+      // Primes are superscripts themselves.
+      const carrier = base.endsWith("'") ? `{${base}}` : base;
+      return { latex: `${carrier}^{${exponentLatex(node.right, setting)}}`, rank: rank.power };
     }
     default:
       return sumPart(node, setting);

@@ -82,6 +82,9 @@ export const baseUnits: UnitDefinition[] = [
   // Money as a plain dimension, for the cost of pumping and of losses.
   ...units('money', of.euro, 'none', [
     ['EUR €', 1, { prefixed: 'kM', shown: 'EUR' }],
-    ['ct cent', 0.01],
+    ['ct', 0.01],
   ]),
+  ...units('money', of.dollar, 'none', [['USD', 1, { prefixed: 'kM' }]]),
+  ...units('money', of.sterling, 'none', [['GBP £', 1, { prefixed: 'kM', shown: 'GBP' }]]),
+  ...units('money', of.franc, 'none', [['CHF', 1, { prefixed: 'kM' }]]),
 ];

@@ -20,6 +20,9 @@ export const amount = baseDimension('amount');
 export const current = baseDimension('current');
 export const luminosity = baseDimension('luminosity');
 export const euro = baseDimension('currency');
+export const dollar = baseDimension('US dollar');
+export const sterling = baseDimension('pound sterling');
+export const franc = baseDimension('Swiss franc');
 
 export const area = power(length, 2);
 export const volume = power(length, 3);

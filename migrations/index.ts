@@ -1,0 +1,25 @@
+import type { Knex } from 'knex';
+import * as people from './20261201000100_create_people';
+import * as projects from './20261201000200_create_projects';
+import * as calculations from './20261201000300_create_calculations';
+import * as documents from './20261201000400_create_documents';
+import * as check from './20261201000500_create_check';
+import * as trail from './20261201000600_create_trail';
+import * as lockedRevisions from './20261201000700_keep_locked_revisions';
+
+/** In the order in which they are applied. Names stay for good: the database remembers them. */
+const migrations: readonly (readonly [name: string, migration: Knex.Migration])[] = [
+  ['20261201000100_create_people', people],
+  ['20261201000200_create_projects', projects],
+  ['20261201000300_create_calculations', calculations],
+  ['20261201000400_create_documents', documents],
+  ['20261201000500_create_check', check],
+  ['20261201000600_create_trail', trail],
+  ['20261201000700_keep_locked_revisions', lockedRevisions],
+];
+
+export const migrationSource: Knex.MigrationSource<readonly [string, Knex.Migration]> = {
+  getMigrations: () => Promise.resolve([...migrations]),
+  getMigrationName: ([name]) => name,
+  getMigration: ([, migration]) => Promise.resolve(migration),
+};

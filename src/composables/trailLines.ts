@@ -1,0 +1,95 @@
+import type { TrailEntry } from '#contract';
+import { longDay } from './dates';
+
+export const trailFilters = ['all', 'states', 'remarks', 'ticks', 'writing', 'people'] as const;
+export type TrailFilter = (typeof trailFilters)[number];
+
+export const trailFilterWords: Readonly<Record<TrailFilter, string>> = {
+  all: 'All',
+  states: 'States',
+  remarks: 'Remarks',
+  ticks: 'Ticks',
+  writing: 'Writing',
+  people: 'Project and people',
+};
+
+/** First part of an act (`remark.ask`) → the choice under which it is shown. */
+const kinds: Readonly<Record<string, TrailFilter>> = {
+  revision: 'states',
+  remark: 'remarks',
+  tick: 'ticks',
+  content: 'writing',
+  calculation: 'writing',
+  project: 'people',
+  member: 'people',
+  person: 'people',
+};
+
+export function kindOf(entry: TrailEntry): TrailFilter {
+  return kinds[entry.act.split('.')[0] ?? ''] ?? 'writing';
+}
+
+/** `lock` reversed, `red` the checker's remarks, `green` ticks, else plain. */
+export function toneOf(entry: TrailEntry): 'lock' | 'red' | 'green' | 'plain' {
+  if (entry.act === 'revision.lock') return 'lock';
+  const kind = kindOf(entry);
+  if (kind === 'remarks') return 'red';
+  return kind === 'ticks' ? 'green' : 'plain';
+}
+
+const text = (value: unknown): string =>
+  typeof value === 'string' ? value : typeof value === 'number' ? String(value) : '';
+
+/** What is worth a look in the particulars of an entry: before and after, a reason, a note, a fingerprint. */
+export function particulars(detail: Readonly<Record<string, unknown>>): string {
+  const before = text(detail.before ?? detail.from);
+  const after = text(detail.after ?? detail.to);
+  const change = before !== '' && after !== '' ? `${before} → ${after}` : before || after;
+  const said = ['changeNote', 'reason', 'note', 'text'].map((key) => text(detail[key])).filter((part) => part !== '');
+  const print = text(detail.fingerprint ?? detail.contentFingerprint);
+  return [change, ...said, print === '' ? '' : shortFingerprint(print)].filter((part) => part !== '').join('; ');
+}
+
+/** `4f1c 9a07`: the beginning of a fingerprint, enough to compare by eye. */
+export function shortFingerprint(hash: string, groups = 2): string {
+  return (hash.slice(0, groups * 4).match(/.{1,4}/g) ?? []).join(' ');
+}
+
+export interface TrailDay {
+  day: string;
+  entries: TrailEntry[];
+}
+
+/** Entries (newest first) under the day on which they were made. */
+export function trailDays(entries: readonly TrailEntry[]): TrailDay[] {
+  const days: TrailDay[] = [];
+  for (const entry of entries) {
+    const day = longDay(entry.at);
+    const last = days.at(-1);
+    if (last?.day === day) last.entries.push(entry);
+    else days.push({ day, entries: [entry] });
+  }
+  return days;
+}
+
+/** A field of a table in comma-separated form; a leading sign is kept from being taken for a formula. */
+function csvField(value: string): string {
+  const safe = /^[=+\-@\t\r]/.test(value) ? `'${value}` : value;
+  return /[",\n\r]/.test(safe) ? `"${safe.replaceAll('"', '""')}"` : safe;
+}
+
+/** The trail as a table that other programs read. */
+export function trailCsv(entries: readonly TrailEntry[]): string {
+  const head = ['number', 'time (UTC)', 'who', 'what', 'calculation', 'revision', 'particulars', 'hash'];
+  const rows = entries.map((entry) => [
+    String(entry.id),
+    entry.at,
+    entry.person?.name ?? 'the sheet',
+    entry.sentence,
+    entry.calculation?.number ?? '',
+    entry.letter ?? '',
+    particulars(entry.detail),
+    entry.hash,
+  ]);
+  return [head, ...rows].map((row) => row.map(csvField).join(',')).join('\r\n');
+}

@@ -1,0 +1,35 @@
+import type { CalculationSettings, CellKind, CellSettings } from '#engine';
+import { z } from 'zod';
+
+/** Names of the shared maps in a document. */
+export const cellsMap = 'cells';
+export const settingsMap = 'settings';
+
+export const cellKinds = ['section', 'text', 'expressions', 'fluid', 'relation'] as const satisfies readonly CellKind[];
+
+/** Larger calculations are refused on import, and not written by the screens. */
+export const documentLimits = { cells: 5000, sourceLength: 100_000, settingLength: 2000 } as const;
+
+const setting = z.string().max(documentLimits.settingLength).optional();
+
+export const cellSettingsSchema: z.ZodType<CellSettings> = z.object({
+  name: setting,
+  substance: setting,
+  mode: z.enum(['state', 'film', 'wall', 'saturation']).optional(),
+  relation: setting,
+  keepReason: setting,
+  tbv: setting,
+});
+
+export const calculationSettingsSchema: z.ZodType<CalculationSettings> = z.object({
+  unitSystem: z.enum(['SI', 'US']).default('SI'),
+  significantDigits: z.number().int().min(2).max(10).default(4),
+  ambientPressure: z.number().min(1000).max(1e7).default(101325),
+});
+
+/** Which settings a kind of cell has, and what its source begins with. */
+export interface CellShape {
+  kind: CellKind;
+  settings: readonly (keyof CellSettings)[];
+  template: string;
+}
