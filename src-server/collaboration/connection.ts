@@ -10,6 +10,8 @@ export class Connection {
   /** Awareness ids that this browser speaks for. */
   readonly awarenessIds = new Set<number>();
   alive = true;
+  /** Updates of this connection that are in the database, and whether its first answer is. */
+  kept = { updates: 0, first: false };
   private allowance = burst;
   private lastRefill = Date.now();
 

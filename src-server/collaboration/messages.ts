@@ -9,7 +9,8 @@ const sync = { step1: 0, step2: 1, update: 2 } as const;
 
 export type Incoming =
   | { kind: 'ask'; stateVector: Uint8Array }
-  | { kind: 'update'; update: Uint8Array }
+  /** `first` for the answer to the server's own question: what was written before the line was there. */
+  | { kind: 'update'; update: Uint8Array; first: boolean }
   | { kind: 'awareness'; update: Uint8Array }
   | { kind: 'query awareness' }
   | { kind: 'unknown' };
@@ -30,7 +31,7 @@ export function readMessage(data: Uint8Array): Incoming {
   if (step !== sync.step2 && step !== sync.update) return { kind: 'unknown' };
   // Decoded here, so that a malformed one is refused before anything is done with it.
   Y.decodeUpdate(content);
-  return { kind: 'update', update: content };
+  return { kind: 'update', update: content, first: step === sync.step2 };
 }
 
 function write(...parts: ((encoder: encoding.Encoder) => void)[]): Uint8Array {
@@ -50,9 +51,11 @@ export const updateMessage = (update: Uint8Array): Uint8Array =>
   write(number(message.sync), number(sync.update), bytes(update));
 export const awarenessMessage = (update: Uint8Array): Uint8Array => write(number(message.awareness), bytes(update));
 
-/** Everything up to this state is in the database. */
-export const keptMessage = (doc: Y.Doc, at: number): Uint8Array =>
-  write(number(syncMessage.kept), bytes(Y.encodeStateVector(doc)), (encoder) => encoding.writeFloat64(encoder, at));
+/** How many updates of a connection are in the database, and whether its first answer is. */
+export const keptMessage = (updates: number, first: boolean, at: number): Uint8Array =>
+  write(number(syncMessage.kept), number(updates), number(first ? 1 : 0), (encoder) =>
+    encoding.writeFloat64(encoder, at),
+  );
 
 export const refusedMessage = (reason: string): Uint8Array =>
   write(number(syncMessage.refused), (encoder) => encoding.writeVarString(encoder, reason));

@@ -24,6 +24,7 @@ const largestDocument = 30_000_000;
 interface Pending {
   from: Connection;
   update: Uint8Array;
+  first: boolean;
 }
 
 export interface DocumentCallbacks {
@@ -62,7 +63,6 @@ export class SharedDocument {
   join(connection: Connection): void {
     this.connections.add(connection);
     connection.send(askMessage(this.doc));
-    connection.send(keptMessage(this.doc, Date.now()));
     const present = [...this.awareness.getStates().keys()];
     if (present.length > 0)
       connection.send(awarenessMessage(awarenessProtocol.encodeAwarenessUpdate(this.awareness, present)));
@@ -91,29 +91,36 @@ export class SharedDocument {
       return;
     }
     if (incoming.kind === 'ask') connection.send(answerMessage(this.doc, incoming.stateVector));
-    else if (incoming.kind === 'update') this.takeUpdate(connection, incoming.update);
+    else if (incoming.kind === 'update') this.takeUpdate(connection, incoming.update, incoming.first);
     else if (incoming.kind === 'query awareness') {
       const ids = [...this.awareness.getStates().keys()];
       connection.send(awarenessMessage(awarenessProtocol.encodeAwarenessUpdate(this.awareness, ids)));
     }
   }
 
-  private takeUpdate(connection: Connection, update: Uint8Array): void {
+  private takeUpdate(connection: Connection, update: Uint8Array, first: boolean): void {
     if (isEmpty(update)) {
-      connection.send(keptMessage(this.doc, Date.now()));
+      this.tellKept(connection, first);
       return;
     }
     if (!connection.canWrite) {
       // What a reader's browser has from before is no news; what is news, it must not write.
       if (this.isNews(update)) connection.send(refusedMessage('FORBIDDEN'));
+      else this.tellKept(connection, first);
       return;
     }
     if (this.size > largestDocument) {
       connection.send(refusedMessage('TOO_LARGE'));
       return;
     }
-    this.pending.push({ from: connection, update });
+    this.pending.push({ from: connection, update, first });
     this.flushing ??= this.flushSoon();
+  }
+
+  private tellKept(connection: Connection, first: boolean): void {
+    if (first) connection.kept.first = true;
+    else connection.kept.updates += 1;
+    connection.send(keptMessage(connection.kept.updates, connection.kept.first, Date.now()));
   }
 
   private isNews(update: Uint8Array): boolean {
@@ -158,13 +165,13 @@ export class SharedDocument {
   }
 
   private accept(batch: readonly Pending[], voided: boolean): void {
-    for (const { from, update } of batch) {
+    for (const { from, update, first } of batch) {
       Y.applyUpdate(this.doc, update, from);
       this.spread(updateMessage(update), from);
       this.size += update.length;
+      this.tellKept(from, first);
     }
     const writers = new Set(batch.map(({ from }) => from));
-    for (const writer of writers) writer.send(keptMessage(this.doc, Date.now()));
     for (const personId of new Set([...writers].map((writer) => writer.account.id)))
       this.callbacks.written(personId, voided);
   }
@@ -215,9 +222,15 @@ function isEmpty(update: Uint8Array): boolean {
   return structs.length === 0 && ds.clients.size === 0;
 }
 
-/** Of what a browser says of its user only the colour counts; who it is, the session says. */
-function pickColour(state: object): { colour?: number } {
+/** A colour of the page's own, for carets. */
+const colour = /^(?:#[0-9a-f]{3,8}|var\(--[a-z0-9-]{1,20}\))$/i;
+
+/** Of what a browser says of its user only colours count; who it is, the session says. */
+function pickColour(state: object): Record<string, string> {
   const user: unknown = Reflect.get(state, 'user');
-  const colour: unknown = typeof user === 'object' && user !== null ? Reflect.get(user, 'colour') : undefined;
-  return typeof colour === 'number' ? { colour } : {};
+  if (typeof user !== 'object' || user === null) return {};
+  const named = ['color', 'colorLight'].map((key): [string, unknown] => [key, Reflect.get(user, key)]);
+  return Object.fromEntries(
+    named.filter((entry): entry is [string, string] => typeof entry[1] === 'string' && colour.test(entry[1])),
+  );
 }

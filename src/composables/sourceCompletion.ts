@@ -29,7 +29,7 @@ function nameOptions({ names, numberOf }: Offers): Completion[] {
   }));
 }
 
-const functionOptions: Completion[] = listFunctions().map((signature) => ({
+const functionOptions: Completion[] = listFunctions.map((signature) => ({
   label: signature.name,
   apply: `${signature.name}(`,
   detail: `(${signature.parameters.join(', ')})`,
@@ -51,7 +51,8 @@ function symbolOptions(offers: Offers): Completion[] {
 }
 
 /** A unit stands directly after a number, or after `to`; everywhere else a word is a name. */
-const afterNumber = /(?:(?:^|[^\p{L}\p{N}_.])\d+(?:\.\d*)?(?:[eE][+-]?\d+)?[ \t]*|\bto[ \t]+)([\p{L}°µ%][\p{L}\p{N}_^/*·² ³()°µ]*)?$/u;
+const afterNumber =
+  /(?:(?:^|[^\p{L}\p{N}_.])\d+(?:\.\d*)?(?:[eE][+-]?\d+)?[ \t]*|\bto[ \t]+)([\p{L}°µ%][\p{L}\p{N}_^/*·² ³()°µ]*)?$/u;
 
 function offer(context: CompletionContext, offers: Offers): CompletionResult | null {
   const line = context.state.doc.lineAt(context.pos);

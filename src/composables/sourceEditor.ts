@@ -1,4 +1,10 @@
-import { acceptCompletion, closeBrackets, closeCompletion, completionKeymap, completionStatus } from '@codemirror/autocomplete';
+import {
+  acceptCompletion,
+  closeBrackets,
+  closeCompletion,
+  completionKeymap,
+  completionStatus,
+} from '@codemirror/autocomplete';
 import { defaultKeymap } from '@codemirror/commands';
 import { bracketMatching, language, LanguageSupport, LRLanguage, syntaxHighlighting } from '@codemirror/language';
 import { setDiagnostics, type Diagnostic as EditorDiagnostic } from '@codemirror/lint';
@@ -9,6 +15,7 @@ import { yCollab, yUndoManagerKeymap } from 'y-codemirror.next';
 import type { Awareness } from 'y-protocols/awareness';
 import type * as Y from 'yjs';
 import { calculationParser, type Diagnostic } from '#engine';
+import { remoteCarets } from './remoteCarets';
 import { completion, type Offers } from './sourceCompletion';
 
 export type SourceKind = 'lines' | 'words' | 'title';
@@ -82,11 +89,15 @@ export function createSourceEditor(options: SourceEditorOptions): EditorView {
       keymap.of([...yUndoManagerKeymap, ...completionKeymap, ...defaultKeymap]),
       drawSelection(),
       EditorView.lineWrapping,
-      EditorView.contentAttributes.of({ 'aria-label': options.label, spellcheck: options.kind === 'lines' ? 'false' : 'true' }),
+      EditorView.contentAttributes.of({
+        'aria-label': options.label,
+        spellcheck: options.kind === 'lines' ? 'false' : 'true',
+      }),
       options.hint === '' ? [] : placeholder(options.hint),
       options.readOnly ? [EditorState.readOnly.of(true), EditorView.editable.of(false)] : [],
       linesSupport(options),
-      yCollab(options.text, options.awareness, { undoManager: options.undoManager ?? false }),
+      yCollab(options.text, null, { undoManager: options.undoManager ?? false }),
+      options.awareness === undefined ? [] : remoteCarets(options.text, options.awareness, !options.readOnly),
     ],
   });
   return new EditorView({ state, parent: options.parent });

@@ -41,13 +41,15 @@ const text = (value: unknown): string =>
   typeof value === 'string' ? value : typeof value === 'number' ? String(value) : '';
 
 /** What is worth a look in the particulars of an entry: before and after, a reason, a note, a fingerprint. */
-export function particulars(detail: Readonly<Record<string, unknown>>): string {
+export function particulars({ detail, sentence }: Pick<TrailEntry, 'detail' | 'sentence'>): string {
   const before = text(detail.before ?? detail.from);
   const after = text(detail.after ?? detail.to);
   const change = before !== '' && after !== '' ? `${before} → ${after}` : before || after;
   const said = ['changeNote', 'reason', 'note', 'text'].map((key) => text(detail[key])).filter((part) => part !== '');
   const print = text(detail.fingerprint ?? detail.contentFingerprint);
-  return [change, ...said, print === '' ? '' : shortFingerprint(print)].filter((part) => part !== '').join('; ');
+  return [change, ...said, print === '' ? '' : shortFingerprint(print)]
+    .filter((part) => part !== '' && !sentence.includes(part))
+    .join('; ');
 }
 
 /** `4f1c 9a07`: the beginning of a fingerprint, enough to compare by eye. */
@@ -88,7 +90,7 @@ export function trailCsv(entries: readonly TrailEntry[]): string {
     entry.sentence,
     entry.calculation?.number ?? '',
     entry.letter ?? '',
-    particulars(entry.detail),
+    particulars(entry),
     entry.hash,
   ]);
   return [head, ...rows].map((row) => row.map(csvField).join(',')).join('\r\n');

@@ -137,7 +137,8 @@ export function useCellCommands({ connection, cells, writable, focusing, askRema
       return;
     }
     void navigator.clipboard?.writeText(name).then(
-      () => Notify.create({ message: `${name} is copied; put it where you write.`, classes: 'wf-notice', timeout: 3000 }),
+      () =>
+        Notify.create({ message: `${name} is copied; put it where you write.`, classes: 'wf-notice', timeout: 3000 }),
       () => undefined,
     );
   }

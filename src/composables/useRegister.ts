@@ -2,6 +2,8 @@ import { computed, ref, shallowRef, watch } from 'vue';
 import { storeToRefs } from 'pinia';
 import type { RegisterRow } from '#contract';
 import { getRegister } from 'src/api/projects';
+import { soon } from './soon';
+import { useNotices } from './useNotices';
 import { useProjectsStore } from 'src/stores/projects';
 import { useSessionStore } from 'src/stores/session';
 import { useShellStore } from 'src/stores/shell';
@@ -48,6 +50,13 @@ export function useRegister(projectId: string) {
     },
     { immediate: true },
   );
+
+  // What others do shows at once; many notices in a row are one fetch.
+  const refresh = soon(load);
+  useNotices({ projectId }, (notice) => {
+    if (notice === undefined || ['register', 'revision', 'remarks', 'ticks', 'access'].includes(notice.about))
+      refresh();
+  });
 
   const who = computed(() => ({
     initials: person.value?.initials ?? '',

@@ -34,9 +34,13 @@ export function useRemarks(revisionId: Readonly<Ref<string | undefined>>) {
   const open = computed(() => remarks.value.filter((remark) => remark.state !== 'closed'));
   const closed = computed(() => remarks.value.filter((remark) => remark.state === 'closed'));
 
-  watch(revisionId, () => {
-    remarks.value = [];
-    void load();
-  }, { immediate: true });
+  watch(
+    revisionId,
+    () => {
+      remarks.value = [];
+      void load();
+    },
+    { immediate: true },
+  );
   return { remarks, open, closed, failure, load, ask, answer, close, reopen };
 }

@@ -37,7 +37,9 @@ function trace(id: string | undefined, results: ReadonlyMap<string, CellResult>)
   const none = { uses: new Set<string>(), follows: new Set<string>() };
   const own = id === undefined ? undefined : results.get(id);
   if (id === undefined || own === undefined) return none;
-  const definer = new Map([...results.values()].flatMap((cell) => cell.defines.map((name) => [name, cell.id] as const)));
+  const definer = new Map(
+    [...results.values()].flatMap((cell) => cell.defines.map((name) => [name, cell.id] as const)),
+  );
   const base = (name: string) => definer.get(name) ?? definer.get(name.split('.')[0] ?? name);
   const uses = new Set(own.uses.flatMap((name) => base(name) ?? []));
   const follows = new Set<string>();

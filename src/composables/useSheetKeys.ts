@@ -26,7 +26,16 @@ function atCellOrNowhere(): boolean {
 }
 
 /** The keys of the sheet: at a cell, and anywhere on the page. */
-export function useSheetKeys({ focusing, writingId, commands, finding, stepOpen, undo, redo, report }: SheetKeys): void {
+export function useSheetKeys({
+  focusing,
+  writingId,
+  commands,
+  finding,
+  stepOpen,
+  undo,
+  redo,
+  report,
+}: SheetKeys): void {
   const router = useRouter();
   const here = () => focusing.focusedId.value;
   const withCell = (act: (id: string) => void) => () => {

@@ -81,9 +81,13 @@ export function useTicks(
     }
   }
 
-  watch(revisionId, () => {
-    ticks.value = new Map();
-    void load();
-  }, { immediate: true });
+  watch(
+    revisionId,
+    () => {
+      ticks.value = new Map();
+      void load();
+    },
+    { immediate: true },
+  );
   return { ticks, failure, load, stateOf, changesOf, toggle };
 }

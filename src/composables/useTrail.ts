@@ -3,6 +3,8 @@ import type { Project, RegisterRow, TrailEntry } from '#contract';
 import { getRegister, getTrail } from 'src/api/projects';
 import { useProjectsStore } from 'src/stores/projects';
 import { useShellStore } from 'src/stores/shell';
+import { soon } from './soon';
+import { useNotices } from './useNotices';
 import { kindOf, trailDays, type TrailFilter } from './trailLines';
 
 /** The trail of a project, or of one calculation in it, page by page from the newest. */
@@ -52,6 +54,22 @@ export function useTrail(projectId: string, calculationId: () => string | undefi
       more.value = page.more;
     });
   watch(calculationId, load);
+
+  /** New entries on top of those that are there; earlier pages stay. */
+  const loadNew = () =>
+    guarded(async (mine) => {
+      const page = await getTrail(projectId, { calculationId: calculationId() });
+      const newest = entries.value[0]?.id ?? 0;
+      const fresh = page.entries.filter(({ id }) => id > newest);
+      if (mine !== latest) return;
+      // More came than one page holds: what lies between is missing, so begin anew.
+      if (fresh.length === page.entries.length && page.more) more.value = true;
+      entries.value = fresh.length === page.entries.length ? fresh : [...fresh, ...entries.value];
+    });
+  const refresh = soon(loadNew);
+  useNotices({ projectId }, (notice) => {
+    if (notice === undefined || notice.about === 'trail') refresh();
+  });
 
   const shown = computed(() =>
     entries.value.filter((entry) => filter.value === 'all' || kindOf(entry) === filter.value),

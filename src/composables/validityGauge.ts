@@ -99,7 +99,8 @@ function labelsOf(low: number | undefined, high: number | undefined, at: (value:
   const xHigh = high === undefined ? undefined : at(high);
   const near = xLow !== undefined && xHigh !== undefined && xHigh - xLow < labelRoom;
   const labels: GaugeDrawing['labels'] = [];
-  if (low !== undefined && xLow !== undefined) labels.push({ x: xLow, text: limitText(low), anchor: near ? 'end' : 'middle' });
+  if (low !== undefined && xLow !== undefined)
+    labels.push({ x: xLow, text: limitText(low), anchor: near ? 'end' : 'middle' });
   if (high !== undefined && xHigh !== undefined)
     labels.push({ x: xHigh, text: limitText(high), anchor: near ? 'start' : 'middle' });
   return labels;
@@ -132,7 +133,10 @@ export function layGauge(limits: Limits, width: number): GaugeDrawing {
   };
 }
 
-function hatchOf({ low, high, value }: Limits, at: (value: number) => number): { hatch?: { x: number; width: number } } {
+function hatchOf(
+  { low, high, value }: Limits,
+  at: (value: number) => number,
+): { hatch?: { x: number; width: number } } {
   if (value === undefined || !Number.isFinite(value)) return {};
   if (low !== undefined && value < low) return { hatch: { x: at(value), width: at(low) - at(value) } };
   if (high !== undefined && value > high) return { hatch: { x: at(high), width: at(value) - at(high) } };

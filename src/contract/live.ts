@@ -20,7 +20,11 @@ export const syncPath = '/sync';
 
 /** Message numbers on the sync connection beyond those of y-websocket (0 sync, 1 awareness, 2 auth, 3 query awareness). */
 export const syncMessage = {
-  /** Server → client: everything up to this state vector is in the database. Body: varUint8Array state vector, float64 server time in ms. */
+  /**
+   * Server → client: what this connection sent is in the database. Body: varUint number of updates of this connection
+   * that are kept, varUint 1 once the answer to the first exchange (what was written offline) is kept too, float64
+   * server time in ms.
+   */
   kept: 4,
   /** Server → client: an update was not taken; body: varString reason code. The client drops what it has not sent for good. */
   refused: 5,

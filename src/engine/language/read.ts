@@ -61,13 +61,12 @@ function readLine(source: string, { from, to, number }: SourceLine): Line {
   }
   const statement = Object.keys(kinds).flatMap((kind) => tree.topNode.getChildren(kind))[0];
   if (statement !== undefined) readWithinLimits(reading, line, statement);
-  const problems = problemsOf(reading, tree);
-  if (problems.length > 0) {
+  line.diagnostics = [...problemsOf(reading, tree), ...reading.diagnostics, ...hintsOf(reading, tree)];
+  if (line.diagnostics.some(({ severity }) => severity === 'error')) {
     // Nothing may be computed from the part of a line that could be read.
     if (statement === undefined) line.kind = 'expression';
     line.expression = { type: 'missing', span: line.span };
   }
-  line.diagnostics = [...problems, ...reading.diagnostics, ...hintsOf(reading, tree)];
   return line;
 }
 

@@ -21,8 +21,12 @@ const deepest = 8;
 const largestExponent = 24;
 
 const word = /[\p{L}°%‰′″€£℃℉][\p{L}\d_°₂€£]*/uy;
-const exponentPattern =
-  /\s*\^\s*(?:([-−+]?\d+(?:\.\d+)?)(?![\d.])|\(\s*([-−+]?\d+(?:\.\d+)?)\s*(?:\/\s*(\d+)\s*)?\))/uy;
+/** Figures may be parted in threes, as everywhere. */
+const figures = '\\d+(?:[\\u00a0\\u202f\\u2009]\\d{3})*(?:\\.\\d+)?';
+const exponentPattern = new RegExp(
+  `\\s*\\^\\s*(?:([-−+]?${figures})(?![\\d.])|\\(\\s*([-−+]?${figures})\\s*(?:\\/\\s*(\\d+)\\s*)?\\))`,
+  'uy',
+);
 const raisedPattern = /[⁻⁰¹²³⁴⁵⁶⁷⁸⁹]+/uy;
 const raisedSigns = '⁰¹²³⁴⁵⁶⁷⁸⁹';
 
@@ -45,7 +49,8 @@ function scanExponent(text: string, at: number): { exponent: number; end: number
   }
   const caret = match(exponentPattern, text, at);
   if (caret === null) return { exponent: 1, end: at };
-  const number = (part: string | undefined) => Number((part ?? '1').replace('−', '-'));
+  const number = (part: string | undefined) =>
+    Number((part ?? '1').replace('−', '-').replace(/[\u00a0\u202f\u2009]/g, ''));
   const exponent = caret[1] !== undefined ? number(caret[1]) : number(caret[2]) / number(caret[3]);
   return { exponent, end: at + caret[0].length };
 }

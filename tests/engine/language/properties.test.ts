@@ -117,7 +117,8 @@ describe('whatever is typed', () => {
         }),
         { numRuns: 20_000 },
       );
-      expect(slowest).toBeLessThan(1000);
+      // Two seconds is the limit for any one cell; readings take milliseconds.
+    expect(slowest).toBeLessThan(2000);
     },
   );
 
@@ -135,10 +136,8 @@ describe('whatever is typed', () => {
     fc.assert(
       fc.property(mutated, (source) => {
         for (const line of readLines(source)) {
-          const structural = line.diagnostics.filter(
-            ({ severity, code }) => severity === 'error' && !/^UNCERTAINTY_UNIT$/.test(code),
-          );
-          if (structural.length > 0) expect(dumpExpression(line.expression!)).toContain('…');
+          if (line.diagnostics.some(({ severity }) => severity === 'error'))
+            expect(dumpExpression(line.expression!)).toContain('…');
         }
       }),
       { numRuns: 3000 },

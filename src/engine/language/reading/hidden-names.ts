@@ -39,7 +39,9 @@ function hintFor(literal: NumberNode, isName: (word: string) => boolean): Diagno
  */
 export function hiddenNameHints(line: Line, isName: (word: string) => boolean): Diagnostic[] {
   if (line.expression === undefined) return [];
+  const warned = line.diagnostics.filter(({ code }) => code === 'UNIT_AFTER_DIVISOR').map(({ span }) => span?.from);
   return literalsOf(line.expression)
+    .filter((literal) => !warned.includes(literal.unit?.span.from))
     .map((literal) => hintFor(literal, isName))
     .filter((hint) => hint !== undefined);
 }

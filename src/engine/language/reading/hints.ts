@@ -81,7 +81,7 @@ function notationProblem(
 ): { code: 'GAUGE_NOTATION' | 'DEGREE_NOTATION'; mended: string; letter: string } | undefined {
   const gauge = new RegExp(`^(${pressures})\\s+g$`).exec(unit)?.[1];
   if (gauge !== undefined) return { code: 'GAUGE_NOTATION', mended: `${gauge}g`, letter: 'gram' };
-  const letter = /^(?:deg|°)\s*[·*]?\s*([CFK])$/.exec(unit)?.[1];
-  if (letter === undefined || /^°[CF]$/.test(unit)) return undefined;
+  const letter = /^(?:deg|°)(?:\s+|\s*[·*]\s*)([CFK])$/.exec(unit)?.[1];
+  if (letter === undefined) return undefined;
   return { code: 'DEGREE_NOTATION', mended: letter === 'K' ? 'K' : `deg${letter}`, letter: letterNames[letter] ?? '' };
 }
