@@ -69,9 +69,12 @@ function judge(relation: Relation, family: RelationFamily, values: ReadonlyMap<s
   return { relation, family, grade: worstGrade(validity.map((each) => each.grade)), validity, output };
 }
 
-/** What the store offers for a geometry and words: those inside every stated range first, then by stated accuracy. */
+/**
+ * What the store offers for a geometry and words. With values at hand: what gives the same output
+ * first, of these what is inside every stated range, then by stated accuracy.
+ */
 export function findCandidates(
-  wanted: { geometry: Geometry | undefined; words: string },
+  wanted: { geometry: Geometry | undefined; words: string; output: string | undefined },
   values: ReadonlyMap<string, number>,
 ): RelationCandidate[] {
   const words = wanted.words.toLowerCase().split(/\s+/).filter(Boolean);
@@ -84,8 +87,10 @@ export function findCandidates(
     );
   if (values.size === 0) return candidates;
   const accuracy = (candidate: RelationCandidate) => candidate.relation.relativeAccuracy ?? Infinity;
+  const other = (candidate: RelationCandidate) => Number(candidate.relation.output.symbol !== wanted.output);
   return candidates.sort(
     (a, b) =>
+      other(a) - other(b) ||
       Number(a.output === undefined) - Number(b.output === undefined) ||
       rank[a.grade] - rank[b.grade] ||
       accuracy(a) - accuracy(b),

@@ -50,7 +50,7 @@ export function useCellCommands({ connection, cells, writable, focusing, askRema
     if (id === undefined) return;
     writingId.value = undefined;
     connection.tell(id, false);
-    void nextTick(() => focusing.focusedId.value === id && focusing.focus(id));
+    void nextTick(() => (focusing.focusedId.value === id ? focusing.focus(id) : undefined));
   }
   async function openPen(after: string | null): Promise<void> {
     if (document() === undefined) return;

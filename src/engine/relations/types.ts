@@ -34,6 +34,8 @@ export interface Relation {
   accuracy: string;
   /** The same as a fraction, where it can be read as one. */
   relativeAccuracy?: number;
+  /** Parts of the range for which the source states another figure; the first that holds counts. */
+  accuracyBands?: readonly { when: string; relativeAccuracy: number }[];
   source: string;
   /** Confirmed by a second source or an independent check value. */
   confirmed: boolean;

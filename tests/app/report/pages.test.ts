@@ -22,7 +22,9 @@ describe('laying blocks on pages', () => {
   });
 
   it('keeps every block once, in order, on pages that are not overfull', () => {
-    const blocks = fc.array(fc.record({ height: fc.integer({ min: 1, max: 100 }), keepWithNext: fc.boolean() }), { maxLength: 60 });
+    const blocks = fc.array(fc.record({ height: fc.integer({ min: 1, max: 100 }), keepWithNext: fc.boolean() }), {
+      maxLength: 60,
+    });
     fc.assert(
       fc.property(blocks, (all) => {
         const pages = layOutPages(all, 100);

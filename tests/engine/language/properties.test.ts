@@ -118,7 +118,7 @@ describe('whatever is typed', () => {
         { numRuns: 20_000 },
       );
       // Two seconds is the limit for any one cell; readings take milliseconds.
-    expect(slowest).toBeLessThan(2000);
+      expect(slowest).toBeLessThan(2000);
     },
   );
 
