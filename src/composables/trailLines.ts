@@ -57,21 +57,53 @@ export function shortFingerprint(hash: string, groups = 2): string {
   return (hash.slice(0, groups * 4).match(/.{1,4}/g) ?? []).join(' ');
 }
 
-export interface TrailDay {
-  day: string;
+/** One line of the ledger: an act, or several of the same kind in a row, of which `entry` is the newest. */
+export interface TrailLine {
+  entry: TrailEntry;
+  /** All of the row, newest first; one where nothing is folded. */
   entries: TrailEntry[];
 }
 
-/** Entries (newest first) under the day on which they were made. */
+export interface TrailDay {
+  day: string;
+  count: number;
+  lines: TrailLine[];
+}
+
+const foldable = ['tick.set', 'tick.remove', 'content.write'];
+/** Acts further apart than this stand on lines of their own. */
+const foldWithin = 15 * 60_000;
+
+function foldsInto(line: TrailLine, entry: TrailEntry): boolean {
+  const oldest = line.entries.at(-1) ?? line.entry;
+  return (
+    foldable.includes(entry.act) &&
+    line.entry.act === entry.act &&
+    line.entry.person?.id === entry.person?.id &&
+    line.entry.calculation?.id === entry.calculation?.id &&
+    line.entry.letter === entry.letter &&
+    Date.parse(oldest.at) - Date.parse(entry.at) <= foldWithin
+  );
+}
+
+/** Entries (newest first) under the day on which they were made; ticks in a row are folded into one line. */
 export function trailDays(entries: readonly TrailEntry[]): TrailDay[] {
   const days: TrailDay[] = [];
   for (const entry of entries) {
     const day = longDay(entry.at);
-    const last = days.at(-1);
-    if (last?.day === day) last.entries.push(entry);
-    else days.push({ day, entries: [entry] });
+    let last = days.at(-1);
+    if (last?.day !== day) days.push((last = { day, count: 0, lines: [] }));
+    last.count += 1;
+    const line = last.lines.at(-1);
+    if (line !== undefined && foldsInto(line, entry)) line.entries.push(entry);
+    else last.lines.push({ entry, entries: [entry] });
   }
   return days;
+}
+
+/** `ticked a cell`, and of six in a row `ticked a cell, 6 times`. */
+export function lineSentence({ entry, entries }: TrailLine): string {
+  return entries.length === 1 ? entry.sentence : `${entry.sentence}, ${entries.length} times`;
 }
 
 /** A field of a table in comma-separated form; a leading sign is kept from being taken for a formula. */

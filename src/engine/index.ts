@@ -3,7 +3,7 @@ export type { Diagnostic, Mend, Severity, Span } from './errors/diagnostic';
 export { createEngine, defaultSettings, evaluateCalculation, limits, type Engine } from './calculation/engine';
 export { sha256 } from './calculation/fingerprint';
 export { twelveDigits } from './calculation/present';
-export { evaluateRelation, validityOf, workThrough } from './calculation/relation-evaluation';
+export { evaluateRelation, rankRelations, validityOf, workThrough } from './calculation/relation-evaluation';
 export type * from './calculation/types';
 export { functionSignatures as listFunctions, type FunctionSignature } from './language/functions';
 export {
@@ -28,9 +28,12 @@ export {
   catalogueVersion,
   findRelation,
   listFamilies,
+  listRelations,
   readRelation,
   worstGrade,
   type CatalogueEntry,
+  type RankedRelation,
+  type RankScope,
 } from './relations/index';
 export type * from './relations/types';
 export { resolveUnit, unitNames as listUnits } from './units/index';

@@ -1,10 +1,21 @@
-import { constants, type Symbol } from './symbols';
+import { siUnitText } from '../units/index';
 import { sayingOf, sha256 } from './fingerprint';
 import type { CalculationNode, Outcome } from './node';
 import { present, twelveDigits } from './present';
+import { constants, type Symbol } from './symbols';
 import { inlineNames } from './text-node';
-import { siUnitText } from '../units/index';
 import type { CalculationSettings, CellInput, CellResult } from './types';
+
+/** What a cell's result is put together from. */
+export interface CellParts {
+  cell: CellInput;
+  nodes: readonly CalculationNode[];
+  /** Outcomes of the nodes, in their order. */
+  own: readonly Outcome[];
+  /** Names that the cell uses, and the outcomes of what defines them. */
+  uses: readonly string[];
+  definers: readonly (Outcome | undefined)[];
+}
 
 function figureOf(symbol: Symbol | undefined): string {
   if (symbol?.value === undefined || symbol.type === undefined) return 'no value';
@@ -13,77 +24,56 @@ function figureOf(symbol: Symbol | undefined): string {
   return unit === '1' ? figure : `${figure} ${unit}`;
 }
 
-/** Values that a cell uses directly, to 12 digits; of a fluid state or relation all that it offers. */
-function dependenciesOf(
-  cell: CellInput,
-  uses: readonly string[],
-  defines: ReadonlySet<string>,
-  symbols: ReadonlyMap<string, Symbol>,
-): Record<string, string> {
-  const source = cell.source.replace(/[ρμλνβασ]/g, '');
-  const entries = uses
-    .filter((name) => !defines.has(name) && !(constants.has(name) && !symbols.has(name)))
-    .flatMap((name): [string, string][] => {
-      const members = [...symbols.keys()].filter((key) => key.startsWith(`${name}.`) && source.includes(key));
-      return members.length > 0
-        ? members.map((key) => [key, figureOf(symbols.get(key))])
-        : [[name, figureOf(symbols.get(name))]];
-    });
+/** Values that a cell uses, to 12 digits; of a fluid state or relation those that it names. */
+function dependenciesOf({ cell, nodes, uses, definers }: CellParts): Record<string, string> {
+  const defined = new Set(nodes.flatMap((node) => node.defines ?? []));
+  const entries = uses.flatMap((name, index): [string, string][] => {
+    const definer = definers[index];
+    if (defined.has(name) || (definer === undefined && constants.has(name))) return [];
+    const members = [...(definer?.symbols ?? [])].filter(([key]) => key.includes('.') && cell.source.includes(key));
+    if (members.length > 0) return members.map(([key, symbol]) => [key, figureOf(symbol)]);
+    return [[name, figureOf(definer?.symbols.get(name))]];
+  });
   return Object.fromEntries(entries.sort(([a], [b]) => (a < b ? -1 : 1)));
 }
 
-function results(cell: CellInput, nodes: readonly CalculationNode[], outcomes: ReadonlyMap<string, Outcome>): string[] {
-  return nodes.flatMap((node) => {
-    const outcome = outcomes.get(node.key);
-    const named = outcome?.line?.value;
-    return named === undefined ? [] : [`${node.defines ?? cell.id}=${twelveDigits(named)}`];
-  });
+function ownValues({ cell, nodes, own }: CellParts): string[] {
+  return own.flatMap((outcome, index) =>
+    outcome.line?.value === undefined
+      ? []
+      : [`${nodes[index]?.defines ?? cell.id}=${twelveDigits(outcome.line.value)}`],
+  );
 }
 
-/**
- * The result of a cell from those of its nodes. Answers the result of before, the same object, when
- * nothing that shows or counts is another.
- */
-export function assembleCell(
-  cell: CellInput,
-  nodes: readonly CalculationNode[],
-  outcomes: ReadonlyMap<string, Outcome>,
-  symbols: ReadonlyMap<string, Symbol>,
-  settings: CalculationSettings,
-  fingerprints: Map<string, string>,
-  before: CellResult | undefined,
-): CellResult {
-  const own = nodes.flatMap((node) => outcomes.get(node.key) ?? []);
-  const defines = nodes.flatMap((node) => node.defines ?? []);
-  const uses = [...new Set(nodes.flatMap((node) => node.uses))];
-  const dependsOn = dependenciesOf(cell, uses, new Set(defines), symbols);
-  const inline: CellResult['inline'] = {};
-  for (const name of cell.kind === 'text' ? inlineNames(cell.source) : []) {
-    const symbol = symbols.get(name) ?? constants.get(name);
-    if (symbol?.value !== undefined && symbol.type !== undefined) inline[name] = shownOf(name, own, symbol, settings);
-  }
-  const fingerprint = sha256(JSON.stringify([sayingOf(cell), dependsOn, results(cell, nodes, outcomes)]));
-  fingerprints.set(cell.id, fingerprint);
-  const result: CellResult = {
+function inlineValues({ cell, uses, definers }: CellParts, settings: CalculationSettings): CellResult['inline'] {
+  if (cell.kind !== 'text') return {};
+  const symbolOf = (key: string) =>
+    definers[uses.indexOf(key.split('.')[0] ?? key)]?.symbols.get(key) ?? constants.get(key);
+  return Object.fromEntries(
+    inlineNames(cell.source).flatMap((name) => {
+      const symbol = symbolOf(name);
+      if (symbol?.value === undefined || symbol.type === undefined) return [];
+      return [[name, symbol.display ?? present(symbol.value, symbol.type, settings)]];
+    }),
+  );
+}
+
+/** The result of a cell from those of its nodes and of what it uses. */
+export function assembleCell(parts: CellParts, settings: CalculationSettings): CellResult {
+  const { cell, nodes, own, uses } = parts;
+  const dependsOn = dependenciesOf(parts);
+  return {
     id: cell.id,
     kind: cell.kind,
     lines: own.flatMap((outcome) => outcome.line ?? []),
     fluid: own.find((outcome) => outcome.fluid !== undefined)?.fluid,
     relation: own.find((outcome) => outcome.relation !== undefined)?.relation,
-    inline,
+    inline: inlineValues(parts, settings),
     diagnostics: own.flatMap((outcome) => outcome.diagnostics),
     outsideRange: [...new Set(own.flatMap((outcome) => outcome.outsideRange))],
-    defines,
-    uses,
-    fingerprint,
+    defines: nodes.flatMap((node) => node.defines ?? []),
+    uses: [...uses],
+    fingerprint: sha256(JSON.stringify([sayingOf(cell), dependsOn, ownValues(parts)])),
     dependsOn,
   };
-  return before !== undefined && JSON.stringify(before) === JSON.stringify(result) ? before : result;
-}
-
-function shownOf(name: string, own: readonly Outcome[], symbol: Symbol, settings: CalculationSettings) {
-  const line = own.find((outcome) => outcome.line?.name === name)?.line;
-  return (
-    line?.value ?? present(symbol.value ?? 0, symbol.type ?? { kind: 'number', dimension: [], levels: 0 }, settings)
-  );
 }

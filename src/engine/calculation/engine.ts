@@ -27,6 +27,12 @@ interface Computed {
   rests: readonly unknown[];
 }
 
+/** The result of a cell, and everything that it was put together from. */
+interface Assembled {
+  result: CellResult;
+  rests: readonly unknown[];
+}
+
 /** A calculation that is kept, changed and computed anew only where something changed. */
 export interface Engine {
   update(change: CalculationChange): CalculationDelta;
@@ -39,7 +45,7 @@ class KeptCalculation implements Engine {
   private readonly nodes = new Map<string, CalculationNode[]>();
   private order: string[] = [];
   private readonly computed = new Map<string, Computed>();
-  private results = new Map<string, CellResult>();
+  private results = new Map<string, Assembled>();
 
   update(change: CalculationChange): CalculationDelta {
     if (change.settings !== undefined) {
@@ -105,7 +111,7 @@ class KeptCalculation implements Engine {
       ];
       outcomes.set(key, this.outcomeOf(node, rests, names, first, outcomes, doubled.get(key), numbers));
     }
-    return this.collect(outcomes, removed);
+    return this.collect(outcomes, first, removed);
   }
 
   private outcomeOf(
@@ -118,12 +124,7 @@ class KeptCalculation implements Engine {
     numbers: ReadonlyMap<string, string>,
   ): Outcome {
     const kept = this.computed.get(node.key);
-    if (
-      kept !== undefined &&
-      kept.rests.length === rests.length &&
-      kept.rests.every((part, index) => part === rests[index])
-    )
-      return kept.outcome;
+    if (kept !== undefined && sameItems(kept.rests, rests)) return kept.outcome;
     const outcomeBehind = (name: string) => {
       const definer = first.get(name);
       return definer === undefined ? undefined : outcomes.get(definer.key);
@@ -191,35 +192,37 @@ class KeptCalculation implements Engine {
     );
   }
 
-  private collect(outcomes: ReadonlyMap<string, Outcome>, removed: readonly string[]): CalculationDelta {
-    const results = new Map<string, CellResult>();
+  /** Cells anew whose own outcomes, or those of what they use, are others than before. */
+  private collect(
+    outcomes: ReadonlyMap<string, Outcome>,
+    first: ReadonlyMap<string, CalculationNode>,
+    removed: readonly string[],
+  ): CalculationDelta {
+    const results = new Map<string, Assembled>();
     const changed: CellResult[] = [];
-    const symbols = new Map<string, Symbol>();
-    for (const outcome of outcomes.values())
-      for (const [name, symbol] of outcome.symbols)
-        if (!symbols.has(name) || symbol.value !== undefined) symbols.set(name, symbol);
-    const fingerprints = new Map<string, string>();
     for (const id of this.order) {
       const cell = this.cells.get(id);
       if (cell === undefined) continue;
-      const result = assembleCell(
-        cell,
-        this.nodes.get(id) ?? [],
-        outcomes,
-        symbols,
-        this.settings,
-        fingerprints,
-        this.results.get(id),
-      );
-      results.set(id, result);
-      if (result !== this.results.get(id)) changed.push(result);
+      const nodes = this.nodes.get(id) ?? [];
+      const own = nodes.flatMap((node) => outcomes.get(node.key) ?? []);
+      const uses = [...new Set(nodes.flatMap((node) => node.uses))];
+      const definers = uses.map((name) => outcomes.get(first.get(name)?.key ?? ''));
+      const rests = [cell, this.settings, ...own, ...definers];
+      const before = this.results.get(id);
+      if (before !== undefined && sameItems(before.rests, rests)) {
+        results.set(id, before);
+        continue;
+      }
+      const result = assembleCell({ cell, nodes, own, uses, definers }, this.settings);
+      results.set(id, { result, rests });
+      if (before === undefined || JSON.stringify(before.result) !== JSON.stringify(result)) changed.push(result);
     }
     this.results = results;
     return { cells: changed, removed: [...removed], names: this.names() };
   }
 
   private names(): NamedValue[] {
-    return [...this.results.values()].flatMap((result) => [
+    return [...this.results.values()].flatMap(({ result }) => [
       ...result.lines.flatMap((line) =>
         line.name === undefined ? [] : [{ name: line.name, cellId: result.id, value: line.value }],
       ),
@@ -231,8 +234,15 @@ class KeptCalculation implements Engine {
   }
 
   result(): CalculationResult {
-    return { cells: Object.fromEntries(this.results), names: this.names() };
+    return {
+      cells: Object.fromEntries([...this.results].map(([id, { result }]) => [id, result])),
+      names: this.names(),
+    };
   }
+}
+
+function sameItems(left: readonly unknown[], right: readonly unknown[]): boolean {
+  return left.length === right.length && left.every((item, index) => item === right[index]);
 }
 
 function secondDefinition(outcome: Outcome, node: CalculationNode, number: string): Outcome {

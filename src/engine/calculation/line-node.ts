@@ -105,6 +105,7 @@ function computeLine(line: Line, uses: readonly string[], surroundings: Surround
   if (line.kind === 'require') result.satisfied = value !== 0;
   symbol.value = value;
   symbol.shown = valueLatex(result.value);
+  symbol.display = result.value;
   return outcome();
 }
 

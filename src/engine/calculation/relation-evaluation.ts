@@ -1,9 +1,17 @@
 import { evaluateNumbers } from '../evaluation/index';
 import type { Expression } from '../language/index';
 import { findRoot } from '../numerics/roots';
-import { computeRelation, judgeValidity } from '../relations/index';
+import {
+  accuracyAt,
+  activeBranches,
+  computeRelation,
+  judgeValidity,
+  rankRelations as rankAll,
+  type RankedRelation,
+  type RankScope,
+} from '../relations/index';
 import type { Relation } from '../relations/types';
-import type { ValidityResult } from './types';
+import type { ActiveBranch, ValidityResult } from './types';
 
 /** Value of an expression on plain numbers; undefined when it has none. */
 export function numberOf(expression: Expression, values: ReadonlyMap<string, number>): number | undefined {
@@ -26,6 +34,21 @@ export function workThrough(
 
 export function validityOf(relation: Relation, values: ReadonlyMap<string, number>): ValidityResult[] {
   return judgeValidity(relation, values, numberOf);
+}
+
+/** Active sides of the piecewise lines of a relation. */
+export function branchesOf(relation: Relation, values: ReadonlyMap<string, number>): ActiveBranch[] {
+  return activeBranches(relation, values, numberOf);
+}
+
+/** Stated accuracy at a case, as a fraction; undefined where the source states none. */
+export function statedAccuracyOf(relation: Relation, values: ReadonlyMap<string, number>): number | undefined {
+  return accuracyAt(relation, values, numberOf);
+}
+
+/** All relations that answer the same question, the best fit for the values of a case first. */
+export function rankRelations(scope: RankScope, values: ReadonlyMap<string, number>): RankedRelation[] {
+  return rankAll(scope, values, numberOf, rootOf);
 }
 
 /** The result of a relation as a plain number in the unit of its output, or why there is none. */

@@ -1,4 +1,5 @@
 import type { Diagnostic } from '../errors/diagnostic';
+import { relationDiagnostic } from '../errors/relation-errors';
 import { expressionLatex, readLines, substitutedLatex, symbolLatex, type Line } from '../language/index';
 import { describe, type Inferred } from '../language/inference';
 import { findRelation, readRelation, worstGrade, type CatalogueEntry } from '../relations/index';
@@ -7,16 +8,10 @@ import { isDimensionless, resolveUnit, sameDimension, type ResolvedUnit } from '
 import { dependenciesOf, evaluateExpression } from './expression';
 import type { CalculationNode, Outcome, Surroundings } from './node';
 import { present, valueLatex } from './present';
-import { validityOf, workThrough } from './relation-evaluation';
+import { branchesOf, statedAccuracyOf, validityOf, workThrough } from './relation-evaluation';
 import type { Symbol } from './symbols';
 import type { CellInput, LineResult, RelationCellResult, RelationInputResult } from './types';
 
-const error = (code: string, message: string, span?: Diagnostic['span']): Diagnostic => ({
-  code,
-  severity: 'error',
-  message,
-  ...(span === undefined ? {} : { span }),
-});
 const unitOf = (symbol: RelationSymbol): ResolvedUnit => {
   const unit = resolveUnit(symbol.unit);
   if (unit === undefined) throw new Error(`The catalogue names no unit: ${symbol.unit}`);
@@ -24,6 +19,8 @@ const unitOf = (symbol: RelationSymbol): ResolvedUnit => {
 };
 const typeOf = (symbol: RelationSymbol): Inferred => {
   const { dimension } = unitOf(symbol);
+  if (symbol.temperature !== undefined)
+    return { kind: 'number', dimension, levels: symbol.temperature === 'level' ? 1 : 0 };
   return { kind: 'number', dimension, levels: isDimensionless(dimension) ? 0 : 'any' };
 };
 
@@ -67,19 +64,30 @@ function bind(
   if (evaluated.type === undefined) return { input, diagnostics };
   const unit = unitOf(symbol);
   if (!sameDimension(evaluated.type.dimension, unit.dimension)) {
-    const wanted = describe(typeOf(symbol));
-    diagnostics.push(
-      error(
-        'UNITS_DISAGREE',
-        `${symbol.symbol} (${symbol.quantity}) is wanted as ${wanted}; this is ${describe(evaluated.type)}.`,
-        line.expression.span,
-      ),
-    );
+    const parameters = {
+      symbol: symbol.symbol,
+      quantity: symbol.quantity,
+      wanted: describe(typeOf(symbol)),
+      given: describe(evaluated.type),
+    };
+    diagnostics.push(relationDiagnostic('UNITS_DISAGREE', parameters, line.expression.span));
+    return { input, diagnostics };
+  }
+  const { levels } = evaluated.type;
+  const mistaken =
+    symbol.temperature === 'difference' && typeof levels === 'number' && levels !== 0
+      ? 'DIFFERENCE_WANTED'
+      : symbol.temperature === 'level' && levels === 0
+        ? 'LEVEL_WANTED'
+        : undefined;
+  if (mistaken !== undefined) {
+    const parameters = { symbol: symbol.symbol, quantity: symbol.quantity };
+    diagnostics.push(relationDiagnostic(mistaken, parameters, line.expression.span));
     return { input, diagnostics };
   }
   if (evaluated.value === undefined) return { input, diagnostics };
   input.value = present(evaluated.value, evaluated.type, surroundings.settings);
-  return { input, number: evaluated.value / unit.factor, diagnostics };
+  return { input, number: (evaluated.value - unit.offset) / unit.factor, diagnostics };
 }
 
 function bindAll(relation: Relation, bindings: readonly Line[], surroundings: Surroundings): Bound[] {
@@ -91,16 +99,17 @@ function bindAll(relation: Relation, bindings: readonly Line[], surroundings: Su
 }
 
 /** Type of any symbol of the relation: declared for inputs and output, a plain number for what stands between. */
-function symbolType(relation: Relation, symbol: string): { type: Inferred; factor: number } {
+function symbolType(relation: Relation, symbol: string): { type: Inferred; toSi(number: number): number } {
   const declared = [...relation.inputs, ...relation.validitySymbols, relation.output].find(
     (one) => one.symbol === symbol,
   );
   if (declared === undefined)
     return {
       type: { kind: 'number', dimension: unitOf({ symbol, quantity: '', unit: '1' }).dimension, levels: 0 },
-      factor: 1,
+      toSi: (number) => number,
     };
-  return { type: typeOf(declared), factor: unitOf(declared).factor };
+  const { factor, offset } = unitOf(declared);
+  return { type: typeOf(declared), toSi: (number) => number * factor + offset };
 }
 
 function formulaLines(
@@ -111,8 +120,8 @@ function formulaLines(
   const shownOf = (symbol: string) => {
     const value = values.get(symbol);
     if (value === undefined) return undefined;
-    const { type, factor } = symbolType(relation, symbol);
-    return present(value * factor, type, surroundings.settings);
+    const { type, toSi } = symbolType(relation, symbol);
+    return present(toSi(value), type, surroundings.settings);
   };
   return readRelation(relation).formula.map((line, index): LineResult => {
     const expression = line.kind === 'assignment' ? line.expression : line.equation;
@@ -151,12 +160,7 @@ function compute(
   if (entry === undefined) {
     return {
       symbols,
-      diagnostics: [
-        error(
-          'UNKNOWN_RELATION',
-          `There is no relation "${cell.settings.relation ?? ''}" in the catalogue; choose one.`,
-        ),
-      ],
+      diagnostics: [relationDiagnostic('UNKNOWN_RELATION', { relation: cell.settings.relation ?? '' })],
       outsideRange: behind,
     };
   }
@@ -169,19 +173,18 @@ function compute(
   const unbound = relation.inputs.filter((symbol) => !bindings.some((line) => line.name === symbol.symbol));
   if (unbound.length > 0) {
     const list = unbound.map((symbol) => `${symbol.symbol} (${symbol.quantity})`).join(', ');
-    diagnostics.push(error('RELATION_INPUT', `Still to be given: ${list}. Write ${unbound[0]?.symbol ?? ''} = ….`));
+    diagnostics.push(relationDiagnostic('RELATION_INPUT', { list, first: unbound[0]?.symbol ?? '' }));
   }
   const complete = relation.inputs.every((symbol) => given.has(symbol.symbol));
   const { values, failed } = complete ? workThrough(relation, given) : { values: given, failed: undefined };
-  if (failed !== undefined)
-    diagnostics.push(error('NO_VALUE', `${relation.title} has no result for ${failed} with these values.`));
+  if (failed !== undefined) diagnostics.push(relationDiagnostic('NO_VALUE', { title: relation.title, symbol: failed }));
   const validity = validityOf(relation, values);
   const grade = worstGrade(validity.map((one) => one.grade));
   const outside = grade === 'outside' && (cell.settings.keepReason ?? '') === '';
   if (complete && failed === undefined) {
     for (const [symbol, number] of values) {
-      const { type, factor } = symbolType(relation, symbol);
-      const si = number * factor;
+      const { type, toSi } = symbolType(relation, symbol);
+      const si = toSi(number);
       symbols.set(`${name}.${symbol}`, {
         type,
         value: si,
@@ -208,10 +211,10 @@ function relationResult(
   family: string,
   surroundings: Surroundings,
 ): RelationCellResult {
-  const { type, factor } = symbolType(relation, relation.output.symbol);
+  const { type, toSi } = symbolType(relation, relation.output.symbol);
   const result = values.get(relation.output.symbol);
-  const shown = (number: number) => present(number * factor, type, surroundings.settings);
-  const part = relation.relativeAccuracy;
+  const shown = (number: number) => present(toSi(number), type, surroundings.settings);
+  const part = statedAccuracyOf(relation, values);
   return {
     relation: relation.id,
     title: relation.title,
@@ -229,6 +232,7 @@ function relationResult(
       },
     ],
     validity,
+    branches: branchesOf(relation, values),
     grade,
     propertyTemperature: relation.propertyTemperature,
     characteristicLength: relation.characteristicLength,

@@ -1,5 +1,5 @@
 import type { Inferred } from '../language/inference';
-import { resolveUnit } from '../units/index';
+import { resolveUnit, type DisplayedValue } from '../units/index';
 
 /** What a name stands for once its definition has been computed. */
 export interface Symbol {
@@ -9,6 +9,8 @@ export interface Symbol {
   value?: number | undefined;
   /** As it is shown, for substitution into other lines. */
   shown?: { latex: string; single: boolean } | undefined;
+  /** The same for reading, as its own line shows it. */
+  display?: DisplayedValue | undefined;
 }
 
 const constantRows: readonly [name: string, value: number, unit: string][] = [

@@ -132,6 +132,20 @@ export interface ValidityResult {
   missing: string[];
 }
 
+/** Which side of a joint of a piecewise formula applies, and whether the case lies near the joint. */
+export interface ActiveBranch {
+  /** Symbol of the formula line. */
+  symbol: string;
+  /** The condition as it stands in the formula: `Re < 2000`. */
+  conditionLatex: string;
+  holds: boolean;
+  /** Limit at the joint, where the condition is a simple one. */
+  joint?: number;
+  near: boolean;
+  /** `Re < 2000 holds; near the joint at 2 000`. */
+  message: string;
+}
+
 export interface RelationInputResult {
   symbol: string;
   symbolLatex: string;
@@ -155,6 +169,8 @@ export interface RelationCellResult {
   formula: LineResult[];
   outputs: { symbol: string; symbolLatex: string; name: string; value?: DisplayedValue | undefined }[];
   validity: ValidityResult[];
+  /** Sides of a piecewise formula that apply, and whether the case lies near a joint. */
+  branches?: ActiveBranch[] | undefined;
   /** Worst grade of all conditions. */
   grade: RangeGrade;
   propertyTemperature: string;

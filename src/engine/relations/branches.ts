@@ -1,23 +1,10 @@
+import type { ActiveBranch } from '../calculation/types';
 import { expressionLatex, formatExpression, partsOf, type CallNode, type Expression } from '../language/index';
-import { readShape, type RangeCondition } from './range-reading';
+import { isFigure, readShape, type RangeCondition } from './range-reading';
 import { figureText } from './range-words';
 import type { EvaluateNumbers } from './range';
 import { readRelation } from './read';
 import type { Relation } from './types';
-
-/** Which side of a joint of a piecewise formula applies, and whether the case lies near the joint. */
-export interface ActiveBranch {
-  /** Symbol of the formula line. */
-  symbol: string;
-  /** The condition as it stands in the formula: `Re < 2000`. */
-  conditionLatex: string;
-  holds: boolean;
-  /** Limit at the joint, where the condition is a simple one. */
-  joint?: number;
-  near: boolean;
-  /** `Re < 2000 holds; near the joint at 2 000`. */
-  message: string;
-}
 
 /** Share of a joint within which a case is called near it, the same as for limits of validity. */
 const edge = 0.05;
@@ -57,6 +44,13 @@ function branch(
 const isBranching = (expression: Expression): expression is CallNode =>
   expression.type === 'call' && expression.name === 'if' && expression.arguments.length === 3;
 
+/** Whether a condition parts ranges of the source, and is no guard of the arithmetic (`Cr == 1`). */
+function isJoint(condition: Expression): boolean {
+  const shape = readShape(condition);
+  if (shape.kind === 'range') return [shape.low, shape.high].every((end) => end === undefined || isFigure(end.limit));
+  return shape.kind === 'order' && shape.comparison.operators[0] !== '==';
+}
+
 /** Follows the sides of `if` that apply; sides that do not are not entered. */
 function branchesIn(
   symbol: string,
@@ -70,8 +64,15 @@ function branchesIn(
   if (condition === undefined || first === undefined || second === undefined) return [];
   const holds = evaluate(condition, values);
   if (holds === undefined) return [];
-  const taken = holds === 0 ? second : first;
-  return [branch(symbol, condition, holds !== 0, values, evaluate), ...branchesIn(symbol, taken, values, evaluate)];
+  const own = isJoint(condition) ? [branch(symbol, condition, holds !== 0, values, evaluate)] : [];
+  return [...own, ...branchesIn(symbol, holds === 0 ? second : first, values, evaluate)];
+}
+
+/** One of several lines that branch at the same joint is enough. */
+function oncePerJoint(branches: readonly ActiveBranch[]): ActiveBranch[] {
+  return branches.filter(
+    (one, index) => branches.findIndex(({ conditionLatex }) => conditionLatex === one.conditionLatex) === index,
+  );
 }
 
 /** Active branches of the piecewise lines of a relation, for the values of a case with its results. */
@@ -80,7 +81,8 @@ export function activeBranches(
   values: ReadonlyMap<string, number>,
   evaluate: EvaluateNumbers,
 ): ActiveBranch[] {
-  return readRelation(relation).formula.flatMap((line) =>
+  const branches = readRelation(relation).formula.flatMap((line) =>
     line.kind === 'assignment' ? branchesIn(line.symbol, line.expression, values, evaluate) : [],
   );
+  return oncePerJoint(branches);
 }

@@ -4,7 +4,8 @@ import type { EvaluateNumbers } from './range';
 import { rankAmong, type RankedRelation, type RankScope } from './rank';
 import type { Relation, RelationFamily } from './types';
 
-export { activeBranches, type ActiveBranch } from './branches';
+export { accuracyAt } from './accuracy';
+export { activeBranches } from './branches';
 export { computeRelation, type FindRoot } from './compute';
 export { judgeValidity, worstGrade, type EvaluateNumbers } from './range';
 export type { RankedRelation, RankScope } from './rank';

@@ -30,7 +30,8 @@ export function symbolsOf(expression: Expression): string[] {
   return [...new Set(names)].filter((name) => name !== 'pi');
 }
 
-function isFigure(expression: Expression): boolean {
+/** Whether an expression has no symbols: a limit as the source prints it. */
+export function isFigure(expression: Expression): boolean {
   return symbolsOf(expression).length === 0;
 }
 

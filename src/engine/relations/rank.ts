@@ -1,4 +1,5 @@
 import type { RangeGrade, ValidityResult } from '../calculation/types';
+import { accuracyAt } from './accuracy';
 import { computeRelation, type FindRoot } from './compute';
 import { judgeValidity, worstGrade, type EvaluateNumbers } from './range';
 import type { Geometry, Relation, RelationFamily } from './types';
@@ -20,6 +21,8 @@ export interface RankedRelation {
   validity: ValidityResult[];
   /** The result in the unit of the output, where the values suffice. */
   output: number | undefined;
+  /** Stated accuracy at this case as a fraction; 0 for an exact relation. */
+  accuracy: number | undefined;
   /** Inputs of the formula that the case does not give. */
   missing: string[];
 }
@@ -40,13 +43,14 @@ function judged(
   // Without a result a case that breaks no condition is still not known to fit.
   const worst = worstGrade(validity.map((one) => one.grade));
   const grade = output === undefined && worst !== 'outside' ? 'unchecked' : worst;
-  return { relation, family, grade, validity, output, missing };
+  const accuracy = accuracyAt(relation, values, evaluate) ?? (/^exact\b/.test(relation.accuracy) ? 0 : undefined);
+  return { relation, family, grade, validity, output, accuracy, missing };
 }
 
 /** Better first: what gives a result, fit, stated accuracy, confirmation. Equal ones keep the catalogue's order. */
 function compare(a: RankedRelation, b: RankedRelation): number {
-  const accuracy = ({ relation }: RankedRelation) => relation.relativeAccuracy ?? Infinity;
-  const byAccuracy = accuracy(a) === accuracy(b) ? 0 : accuracy(a) - accuracy(b);
+  const [first, second] = [a.accuracy ?? Infinity, b.accuracy ?? Infinity];
+  const byAccuracy = first === second ? 0 : first - second;
   return (
     Number(a.output === undefined) - Number(b.output === undefined) ||
     order.indexOf(a.grade) - order.indexOf(b.grade) ||

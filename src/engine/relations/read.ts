@@ -14,6 +14,8 @@ export interface ReadCondition {
 export interface ReadRelation {
   formula: readonly ReadFormulaLine[];
   validity: readonly ReadCondition[];
+  /** Parts of the range with a stated accuracy of their own. */
+  bands: readonly { when: Expression; relativeAccuracy: number }[];
 }
 
 function read(text: string, relation: Relation): Expression {
@@ -51,7 +53,12 @@ export function readRelation(relation: Relation): ReadRelation {
     }
     return { kind: 'assignment', symbol: assignment.name, expression: assignment.expression };
   });
-  const result = { formula, validity: relation.validity.map((text) => ({ text, expression: read(text, relation) })) };
+  const validity = relation.validity.map((text) => ({ text, expression: read(text, relation) }));
+  const bands = (relation.accuracyBands ?? []).map(({ when, relativeAccuracy }) => ({
+    when: read(when, relation),
+    relativeAccuracy,
+  }));
+  const result = { formula, validity, bands };
   kept.set(relation, result);
   return result;
 }

@@ -6,7 +6,11 @@ export const a: RelationSymbol = { symbol: 'a', quantity: 'inner over outer diam
 export const al: RelationSymbol = { symbol: 'al', quantity: 'void fraction', unit: '1' };
 export const alpha: RelationSymbol = { symbol: 'alpha', quantity: 'thermal diffusivity', unit: 'm^2/s' };
 export const b: RelationSymbol = { symbol: 'b', quantity: 'longitudinal pitch ratio S_L/D', unit: '1' };
-export const beta: RelationSymbol = { symbol: 'beta', quantity: 'chevron angle measured from the flow direction', unit: 'rad' };
+export const beta: RelationSymbol = {
+  symbol: 'beta',
+  quantity: 'chevron angle measured from the flow direction',
+  unit: 'rad',
+};
 export const Bi: RelationSymbol = { symbol: 'Bi', quantity: 'Biot number', unit: '1' };
 export const C_D: RelationSymbol = { symbol: 'C_D', quantity: 'drag coefficient', unit: '1' };
 export const C_f: RelationSymbol = { symbol: 'C_f', quantity: 'friction coefficient', unit: '1' };
@@ -21,7 +25,12 @@ export const D_i: RelationSymbol = { symbol: 'D_i', quantity: 'tube inner diamet
 export const dP: RelationSymbol = { symbol: 'dP', quantity: 'pressure difference', unit: 'Pa' };
 export const dp: RelationSymbol = { symbol: 'dp', quantity: 'particle diameter', unit: 'm' };
 export const dPdL: RelationSymbol = { symbol: 'dPdL', quantity: 'frictional pressure gradient', unit: 'Pa/m' };
-export const dT: RelationSymbol = { symbol: 'dT', quantity: 'temperature difference', unit: 'K' };
+export const dT: RelationSymbol = {
+  symbol: 'dT',
+  quantity: 'temperature difference',
+  unit: 'K',
+  temperature: 'difference',
+};
 export const e1: RelationSymbol = { symbol: 'e1', quantity: 'emissivity of surface 1', unit: '1' };
 export const e2: RelationSymbol = { symbol: 'e2', quantity: 'emissivity of surface 2', unit: '1' };
 export const eD: RelationSymbol = { symbol: 'eD', quantity: 'relative roughness', unit: '1' };
@@ -30,8 +39,16 @@ export const eps: RelationSymbol = { symbol: 'eps', quantity: 'void fraction of 
 export const eta: RelationSymbol = { symbol: 'eta', quantity: 'fin efficiency', unit: '1' };
 export const F: RelationSymbol = { symbol: 'F', quantity: 'factor on the Nusselt number', unit: '1' };
 export const f: RelationSymbol = { symbol: 'f', quantity: 'Darcy friction factor', unit: '1' };
-export const f_go: RelationSymbol = { symbol: 'f_go', quantity: 'Darcy friction factor with all mass as vapour', unit: '1' };
-export const f_lo: RelationSymbol = { symbol: 'f_lo', quantity: 'Darcy friction factor with all mass as liquid', unit: '1' };
+export const f_go: RelationSymbol = {
+  symbol: 'f_go',
+  quantity: 'Darcy friction factor with all mass as vapour',
+  unit: '1',
+};
+export const f_lo: RelationSymbol = {
+  symbol: 'f_lo',
+  quantity: 'Darcy friction factor with all mass as liquid',
+  unit: '1',
+};
 export const Fo: RelationSymbol = { symbol: 'Fo', quantity: 'Fourier number', unit: '1' };
 export const fRe: RelationSymbol = { symbol: 'fRe', quantity: 'Fanning friction factor times Re', unit: '1' };
 export const g: RelationSymbol = { symbol: 'g', quantity: 'gravitational acceleration', unit: 'm/s^2' };
@@ -74,11 +91,16 @@ export const rho_l: RelationSymbol = { symbol: 'rho_l', quantity: 'saturated liq
 export const S: RelationSymbol = { symbol: 'S', quantity: 'shape factor', unit: 'm' };
 export const sigma: RelationSymbol = { symbol: 'sigma', quantity: 'surface tension', unit: 'N/m' };
 export const t: RelationSymbol = { symbol: 't', quantity: 'fin thickness', unit: 'm' };
-export const T1: RelationSymbol = { symbol: 'T1', quantity: 'absolute temperature 1', unit: 'K' };
-export const T2: RelationSymbol = { symbol: 'T2', quantity: 'absolute temperature 2', unit: 'K' };
-export const T_b: RelationSymbol = { symbol: 'T_b', quantity: 'bulk temperature', unit: 'K' };
-export const T_inf: RelationSymbol = { symbol: 'T_inf', quantity: 'free-stream or ambient temperature', unit: 'K' };
-export const T_s: RelationSymbol = { symbol: 'T_s', quantity: 'surface temperature', unit: 'K' };
+export const T1: RelationSymbol = { symbol: 'T1', quantity: 'absolute temperature 1', unit: 'K', temperature: 'level' };
+export const T2: RelationSymbol = { symbol: 'T2', quantity: 'absolute temperature 2', unit: 'K', temperature: 'level' };
+export const T_b: RelationSymbol = { symbol: 'T_b', quantity: 'bulk temperature', unit: 'K', temperature: 'level' };
+export const T_inf: RelationSymbol = {
+  symbol: 'T_inf',
+  quantity: 'free-stream or ambient temperature',
+  unit: 'K',
+  temperature: 'level',
+};
+export const T_s: RelationSymbol = { symbol: 'T_s', quantity: 'surface temperature', unit: 'K', temperature: 'level' };
 export const th: RelationSymbol = { symbol: 'th', quantity: 'dimensionless temperature', unit: '1' };
 export const V: RelationSymbol = { symbol: 'V', quantity: 'velocity', unit: 'm/s' };
 export const X: RelationSymbol = { symbol: 'X', quantity: 'Rayleigh number on the spacing times S/L', unit: '1' };

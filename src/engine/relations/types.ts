@@ -4,6 +4,8 @@ export interface RelationSymbol {
   quantity: string;
   /** Unit in the expression language; `1` for a plain number. */
   unit: string;
+  /** For temperatures: one on a scale (25 °C), or a difference of two (5 K). */
+  temperature?: 'level' | 'difference';
 }
 
 /**

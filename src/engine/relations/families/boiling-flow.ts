@@ -25,7 +25,7 @@ export const boilingFlow: RelationFamily = {
         h_fg,
         sigma,
         { symbol: 'dPs', quantity: 'saturation pressure difference for the superheat', unit: 'Pa' },
-        { symbol: 'dT', quantity: 'wall superheat', unit: 'K' },
+        { symbol: 'dT', quantity: 'wall superheat', unit: 'K', temperature: 'difference' },
       ],
       formula: [
         'G = m_dot/(pi*D^2/4)',
@@ -66,7 +66,7 @@ export const boilingFlow: RelationFamily = {
         { symbol: 'M', quantity: 'molar mass', unit: 'g/mol' },
         P,
         P_c,
-        { symbol: 'dT', quantity: 'wall superheat', unit: 'K' },
+        { symbol: 'dT', quantity: 'wall superheat', unit: 'K', temperature: 'difference' },
       ],
       formula: [
         'G = m_dot/(pi*D^2/4)',
@@ -165,7 +165,7 @@ export const boilingFlow: RelationFamily = {
         h_fg,
         sigma,
         { symbol: 'dPs', quantity: 'saturation pressure difference for the superheat', unit: 'Pa' },
-        { symbol: 'dT', quantity: 'wall superheat', unit: 'K' },
+        { symbol: 'dT', quantity: 'wall superheat', unit: 'K', temperature: 'difference' },
         g,
       ],
       formula: [
@@ -325,7 +325,7 @@ export const boilingFlow: RelationFamily = {
       title: 'Onset of boiling of water: Bergles–Rohsenow',
       authors: 'Bergles & Rohsenow',
       year: '1964',
-      inputs: [P, { symbol: 'dT', quantity: 'wall superheat', unit: 'K' }],
+      inputs: [P, { symbol: 'dT', quantity: 'wall superheat', unit: 'K', temperature: 'difference' }],
       formula: ['p = P/1e5', 'q = 1082*p^1.156*(1.799*dT)^(2.16/p^0.0234)'],
       output: q,
       validity: ['1e5 <= P <= 138e5'],

@@ -236,7 +236,7 @@ export const externalCylinder: RelationFamily = {
       title: 'Hot wire in air: Collis–Williams',
       authors: 'Collis & Williams',
       year: '1959',
-      inputs: [Re, { symbol: 'Tf', quantity: 'film temperature', unit: 'K' }, T_inf],
+      inputs: [Re, { symbol: 'Tf', quantity: 'film temperature', unit: 'K', temperature: 'level' }, T_inf],
       formula: ['Nu = if(Re < 44, (0.24 + 0.56*Re^0.45)*(Tf/T_inf)^0.17, 0.48*Re^0.51*(Tf/T_inf)^0.17)'],
       output: Nu,
       validity: ['0.02 < Re < 140'],

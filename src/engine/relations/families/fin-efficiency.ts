@@ -51,7 +51,7 @@ export const finEfficiency: RelationFamily = {
         { symbol: 'P_f', quantity: 'fin perimeter', unit: 'm' },
         k_f,
         { symbol: 'A_c', quantity: 'fin cross-section', unit: 'm^2' },
-        { symbol: 'th_b', quantity: 'base excess temperature', unit: 'K' },
+        { symbol: 'th_b', quantity: 'base excess temperature', unit: 'K', temperature: 'difference' },
         L_f,
       ],
       formula: [
@@ -154,7 +154,7 @@ export const finEfficiency: RelationFamily = {
         { symbol: 'P_f', quantity: 'fin perimeter', unit: 'm' },
         k_f,
         { symbol: 'A_c', quantity: 'fin cross-section', unit: 'm^2' },
-        { symbol: 'th_b', quantity: 'base excess temperature', unit: 'K' },
+        { symbol: 'th_b', quantity: 'base excess temperature', unit: 'K', temperature: 'difference' },
       ],
       formula: ['Q = sqrt(h*P_f*k_f*A_c)*th_b'],
       output: Q,

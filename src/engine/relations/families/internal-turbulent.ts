@@ -195,8 +195,8 @@ export const internalTurbulent: RelationFamily = {
       authors: 'Gnielinski',
       year: '1976',
       inputs: [
-        { symbol: 'T_b', quantity: 'bulk temperature (absolute)', unit: 'K' },
-        { symbol: 'T_w', quantity: 'wall temperature (absolute)', unit: 'K' },
+        { symbol: 'T_b', quantity: 'bulk temperature (absolute)', unit: 'K', temperature: 'level' },
+        { symbol: 'T_w', quantity: 'wall temperature (absolute)', unit: 'K', temperature: 'level' },
       ],
       formula: ['K = (T_b/T_w)^0.45'],
       output: { symbol: 'K', quantity: 'wall factor', unit: '1' },
@@ -588,8 +588,8 @@ export const internalTurbulent: RelationFamily = {
       authors: 'Kays & Crawford',
       year: '',
       inputs: [
-        { symbol: 'T_b', quantity: 'bulk temperature (absolute)', unit: 'K' },
-        { symbol: 'T_w', quantity: 'wall temperature (absolute)', unit: 'K' },
+        { symbol: 'T_b', quantity: 'bulk temperature (absolute)', unit: 'K', temperature: 'level' },
+        { symbol: 'T_w', quantity: 'wall temperature (absolute)', unit: 'K', temperature: 'level' },
       ],
       formula: ['K = if(T_w > T_b, (T_w/T_b)^(-0.5), 1)'],
       output: { symbol: 'K', quantity: 'wall factor', unit: '1' },

@@ -268,7 +268,7 @@ export const radiationExchange: RelationFamily = {
       year: '1963',
       inputs: [T_inf],
       formula: ['T_sky = 0.0552*T_inf^1.5'],
-      output: { symbol: 'T_sky', quantity: 'sky temperature', unit: 'K' },
+      output: { symbol: 'T_sky', quantity: 'sky temperature', unit: 'K', temperature: 'level' },
       validity: ['260 <= T_inf <= 310'],
       validitySymbols: [],
       propertyTemperature: 'none: no property enters',
