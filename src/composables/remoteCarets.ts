@@ -1,4 +1,4 @@
-import { Annotation, RangeSet, type Extension, type Range } from '@codemirror/state';
+import { Annotation, RangeSet, type EditorState, type Extension, type Range } from '@codemirror/state';
 import {
   Decoration,
   ViewPlugin,
@@ -25,18 +25,20 @@ class CaretWidget extends WidgetType {
   constructor(
     readonly hand: number,
     readonly name: string,
+    /** Text follows on the line: the flag stands above it instead of on it. */
+    readonly within: boolean,
   ) {
     super();
   }
   override eq(other: CaretWidget): boolean {
-    return other.hand === this.hand && other.name === this.name;
+    return other.hand === this.hand && other.name === this.name && other.within === this.within;
   }
   override toDOM(): HTMLElement {
     const caret = document.createElement('span');
     caret.className = `remote-caret hand-${this.hand}`;
     caret.setAttribute('aria-hidden', 'true');
     const flag = document.createElement('span');
-    flag.className = `remote-caret__flag hand-${this.hand}`;
+    flag.className = `remote-caret__flag hand-${this.hand}${this.within ? ' remote-caret__flag--above' : ''}`;
     flag.textContent = this.name;
     caret.append(flag);
     return caret;
@@ -71,14 +73,19 @@ function caretsIn(text: Y.Text, awareness: Awareness): Caret[] {
   });
 }
 
-function decorate(carets: readonly Caret[], length: number): DecorationSet {
+function decorate(carets: readonly Caret[], { doc }: EditorState): DecorationSet {
+  const { length } = doc;
   const ranges = carets.flatMap(({ id, name, anchor, head }): Range<Decoration>[] => {
     const hand = handOf(id);
+    const at = Math.min(head, length);
     const from = Math.min(anchor, head, length);
     const to = Math.min(Math.max(anchor, head), length);
-    const widget = Decoration.widget({ widget: new CaretWidget(hand, name), side: head > anchor ? -1 : 1 });
+    const widget = Decoration.widget({
+      widget: new CaretWidget(hand, name, at < doc.lineAt(at).to),
+      side: head > anchor ? -1 : 1,
+    });
     const selection = Decoration.mark({ class: `remote-selection remote-selection--${hand}` });
-    return [...(from < to ? [selection.range(from, to)] : []), widget.range(Math.min(head, length))];
+    return [...(from < to ? [selection.range(from, to)] : []), widget.range(at)];
   });
   return Decoration.set(ranges, true);
 }
@@ -97,12 +104,12 @@ export function remoteCarets(text: Y.Text, awareness: Awareness, tells: boolean)
 
     constructor(private readonly view: EditorView) {
       awareness.on('change', this.onChange);
-      this.decorations = decorate(caretsIn(text, awareness), view.state.doc.length);
+      this.decorations = decorate(caretsIn(text, awareness), view.state);
     }
     update(update: ViewUpdate): void {
       if (tells && update.view.hasFocus && (update.selectionSet || update.docChanged || update.focusChanged))
         this.tell(update.view);
-      this.decorations = decorate(caretsIn(text, awareness), update.view.state.doc.length);
+      this.decorations = decorate(caretsIn(text, awareness), update.state);
     }
     private tell(view: EditorView): void {
       const { anchor, head } = view.state.selection.main;

@@ -1,5 +1,5 @@
 import { computed, ref, shallowRef } from 'vue';
-import type { Conditions, RevisionDetail } from '#contract';
+import type { Condition, Conditions, RevisionDetail } from '#contract';
 import { ApiError } from 'src/api/api-error';
 import { getConditions } from 'src/api/revisions';
 
@@ -12,7 +12,7 @@ export function fingerprintLines(fingerprint: string): string[] {
 }
 
 /** The state of a dialog in which somebody signs: conditions, reasons, password, and what went wrong. */
-export function useSigning(revisionId: () => string) {
+export function useSigning(revisionId: () => string, concerned: () => readonly Condition['id'][]) {
   const conditions = shallowRef<Conditions>();
   const reasons = ref<Record<string, string>>({});
   const password = ref('');
@@ -35,7 +35,10 @@ export function useSigning(revisionId: () => string) {
     }
   }
 
-  const open = computed(() => conditions.value?.conditions.filter((condition) => !condition.met) ?? []);
+  const shown = computed(
+    () => conditions.value?.conditions.filter((condition) => concerned().includes(condition.id)) ?? [],
+  );
+  const open = computed(() => shown.value.filter((condition) => !condition.met));
   /** Open conditions that no reason can leave behind. */
   const blocking = computed(() => open.value.filter((condition) => condition.items.length === 0));
   const unreasoned = computed(() =>
@@ -59,5 +62,5 @@ export function useSigning(revisionId: () => string) {
       busy.value = false;
     }
   }
-  return { conditions, reasons, password, passwordProblem, problem, busy, open, blocking, unreasoned, begin, sign };
+  return { conditions, shown, reasons, password, passwordProblem, problem, busy, blocking, unreasoned, begin, sign };
 }

@@ -1,3 +1,4 @@
+import type { Condition } from '#contract';
 import { nextLetter } from './useRevision';
 
 export type SigningKind = 'handOver' | 'check' | 'lock';
@@ -12,6 +13,16 @@ export interface SigningWords {
   does: string;
   action: string;
 }
+
+/**
+ * Which conditions concern an act: one hands over what is not ticked yet; whether the checker is
+ * independent was settled when the check was signed.
+ */
+export const signingConditions: Readonly<Record<SigningKind, readonly Condition['id'][]>> = {
+  handOver: ['errors', 'requirements', 'ranges', 'tbv'],
+  check: ['ticks', 'remarks', 'errors', 'requirements', 'ranges', 'tbv', 'recomputed', 'independence', 'signatures'],
+  lock: ['ticks', 'remarks', 'errors', 'requirements', 'ranges', 'tbv', 'recomputed', 'signatures'],
+};
 
 /** What the three signing dialogs say. */
 export function signingWords(kind: SigningKind, letter: string): SigningWords {

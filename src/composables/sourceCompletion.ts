@@ -80,6 +80,8 @@ export function completion(offers: () => Offers) {
   return autocompletion({
     override: [(context) => offer(context, offers())],
     icons: false,
+    // Enter ends the line; Tab takes what is offered.
+    defaultKeymap: false,
     closeOnBlur: true,
     activateOnTyping: true,
     maxRenderedOptions: 60,

@@ -2,8 +2,9 @@ import {
   acceptCompletion,
   closeBrackets,
   closeCompletion,
-  completionKeymap,
   completionStatus,
+  moveCompletionSelection,
+  startCompletion,
 } from '@codemirror/autocomplete';
 import { defaultKeymap } from '@codemirror/commands';
 import { bracketMatching, language, LanguageSupport, LRLanguage, syntaxHighlighting } from '@codemirror/language';
@@ -52,6 +53,9 @@ function keysOf(options: SourceEditorOptions): Extension {
   return Prec.high(
     keymap.of([
       { key: 'Tab', run: acceptCompletion },
+      { key: 'Ctrl-Space', run: startCompletion },
+      { key: 'ArrowDown', run: moveCompletionSelection(true) },
+      { key: 'ArrowUp', run: moveCompletionSelection(false) },
       {
         key: 'Escape',
         run: (view) => {
@@ -86,7 +90,7 @@ export function createSourceEditor(options: SourceEditorOptions): EditorView {
     extensions: [
       nonce(),
       keysOf(options),
-      keymap.of([...yUndoManagerKeymap, ...completionKeymap, ...defaultKeymap]),
+      keymap.of([...yUndoManagerKeymap, ...defaultKeymap]),
       drawSelection(),
       EditorView.lineWrapping,
       EditorView.contentAttributes.of({

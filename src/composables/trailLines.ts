@@ -101,9 +101,12 @@ export function trailDays(entries: readonly TrailEntry[]): TrailDay[] {
   return days;
 }
 
-/** `ticked a cell`, and of six in a row `ticked a cell, 6 times`. */
+/** `ticked a cell`, and of six in a row `ticked 6 cells`. */
 export function lineSentence({ entry, entries }: TrailLine): string {
-  return entries.length === 1 ? entry.sentence : `${entry.sentence}, ${entries.length} times`;
+  if (entries.length === 1) return entry.sentence;
+  if (entry.act === 'tick.set') return `ticked ${entries.length} cells`;
+  if (entry.act === 'tick.remove') return `took back the ticks of ${entries.length} cells`;
+  return `${entry.sentence}, ${entries.length} times`;
 }
 
 /** A field of a table in comma-separated form; a leading sign is kept from being taken for a formula. */

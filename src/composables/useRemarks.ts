@@ -19,17 +19,18 @@ export function useRemarks(revisionId: Readonly<Ref<string | undefined>>) {
     }
   }
 
-  function put(remark: Remark): void {
-    const others = remarks.value.filter(({ id }) => id !== remark.id);
-    remarks.value = [...others, remark].sort((a, b) => a.number - b.number);
-  }
-
   async function ask(cellId: string, text: string): Promise<void> {
-    if (revisionId.value !== undefined) put(await api.askRemark(revisionId.value, { cellId, text }));
+    if (revisionId.value !== undefined) remarks.value = await api.askRemark(revisionId.value, { cellId, text });
   }
-  const answer = async (id: string, text: string) => put(await api.answerRemark(id, { text }));
-  const close = async (id: string) => put(await api.closeRemark(id));
-  const reopen = async (id: string) => put(await api.reopenRemark(id));
+  async function answer(id: string, text: string): Promise<void> {
+    remarks.value = await api.answerRemark(id, { text });
+  }
+  async function close(id: string): Promise<void> {
+    remarks.value = await api.closeRemark(id);
+  }
+  async function reopen(id: string): Promise<void> {
+    remarks.value = await api.reopenRemark(id);
+  }
 
   const open = computed(() => remarks.value.filter((remark) => remark.state !== 'closed'));
   const closed = computed(() => remarks.value.filter((remark) => remark.state === 'closed'));

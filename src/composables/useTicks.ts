@@ -28,12 +28,16 @@ export function useTicks(
   const ticks = shallowRef<ReadonlyMap<string, Tick>>(new Map());
   const failure = shallowRef<unknown>();
 
+  function put(all: readonly Tick[]): void {
+    ticks.value = new Map(all.map((tick) => [tick.cellId, tick]));
+  }
+
   async function load(): Promise<void> {
     const id = revisionId.value;
     if (id === undefined) return;
     try {
       const fetched = await api.getTicks(id);
-      if (revisionId.value === id) ticks.value = new Map(fetched.map((tick) => [tick.cellId, tick]));
+      if (revisionId.value === id) put(fetched);
       failure.value = undefined;
     } catch (error) {
       failure.value = error;
@@ -56,25 +60,16 @@ export function useTicks(
     return values.length > 0 ? values : ['what the cell says'];
   }
 
-  function put(cellId: string, tick: Tick | undefined): void {
-    const next = new Map(ticks.value);
-    if (tick === undefined) next.delete(cellId);
-    else next.set(cellId, tick);
-    ticks.value = next;
-  }
-
   /** Ticks, ticks again what has changed, or takes a tick back. Throws ApiError; on a conflict it fetches first. */
   async function toggle(cellId: string): Promise<void> {
     const id = revisionId.value;
     const result = results.value.get(cellId);
     if (id === undefined || result === undefined) return;
     try {
-      if (stateOf(cellId) === 'ticked') {
-        await api.removeTick(id, cellId);
-        put(cellId, undefined);
-      } else {
-        put(cellId, await api.setTick(id, cellId, { fingerprint: result.fingerprint }));
-      }
+      const ticked = stateOf(cellId) === 'ticked';
+      put(
+        ticked ? await api.removeTick(id, cellId) : await api.setTick(id, cellId, { fingerprint: result.fingerprint }),
+      );
     } catch (error) {
       if (error instanceof ApiError && error.status === 409) await load();
       throw error;

@@ -1,9 +1,18 @@
 import type { Diagnostic } from '../errors/diagnostic';
 import { compile, run, type Plan } from '../evaluation/index';
 import { Inference, type Inferred } from '../language/inference';
-import { substitutedLatex, usesOf, type Expression, type MemberNode, type NameNode } from '../language/index';
+import {
+  partsOf,
+  substitutedLatex,
+  ungrouped,
+  usesOf,
+  type Expression,
+  type MemberNode,
+  type NameNode,
+} from '../language/index';
 import { constants, type Symbol } from './symbols';
 import type { Surroundings } from './node';
+import { isTemperatureLevel, present, valueLatex } from './present';
 
 export interface ExpressionOutcome {
   type?: Inferred | undefined;
@@ -64,6 +73,32 @@ export function evaluateExpression(expression: Expression, surroundings: Surroun
   const substitution =
     uses.length === 0 ? undefined : substitutedLatex(expression, (use) => find(surroundings, keyOf(use))?.shown);
   return { type, value: evaluated.value, diagnostics, waitsFor, substitution };
+}
+
+/**
+ * Names that stand as a factor or under a power: a temperature level counts from absolute zero there,
+ * and its figure stands in kelvin.
+ */
+function factorsOf(expression: Expression): (NameNode | MemberNode)[] {
+  const parts = partsOf(expression);
+  const multiplies = expression.type === 'binary' && ['*', '/', '^'].includes(expression.operator);
+  const own = multiplies ? parts.map(ungrouped).filter((part) => part.type === 'name' || part.type === 'member') : [];
+  return [...own, ...parts.flatMap(factorsOf)];
+}
+
+function substituted(expression: Expression, surroundings: Surroundings): string {
+  const factors = new Set(factorsOf(expression));
+  return substitutedLatex(expression, (use) => {
+    const symbol = find(surroundings, keyOf(use));
+    if (
+      symbol?.type === undefined ||
+      symbol.value === undefined ||
+      !factors.has(use) ||
+      !isTemperatureLevel(symbol.type)
+    )
+      return symbol?.shown;
+    return valueLatex(present(symbol.value, { ...symbol.type, levels: 'any' }, surroundings.settings));
+  });
 }
 
 function isWaiting(use: NameNode | MemberNode, surroundings: Surroundings): boolean {

@@ -117,16 +117,17 @@ function formulaLines(
   values: ReadonlyMap<string, number>,
   surroundings: Surroundings,
 ): LineResult[] {
-  const shownOf = (symbol: string) => {
+  const shownOf = (symbol: string, inFormula = false) => {
     const value = values.get(symbol);
     if (value === undefined) return undefined;
     const { type, toSi } = symbolType(relation, symbol);
-    return present(toSi(value), type, surroundings.settings);
+    // Formulas take temperatures from absolute zero: their figures stand in kelvin, not in °C.
+    return present(toSi(value), inFormula ? { ...type, levels: 'any' } : type, surroundings.settings);
   };
   return readRelation(relation).formula.map((line, index): LineResult => {
     const expression = line.kind === 'assignment' ? line.expression : line.equation;
     const lookup = (use: { type: 'name'; name: string } | { type: 'member' }) => {
-      const shown = use.type === 'name' ? shownOf(use.name) : undefined;
+      const shown = use.type === 'name' ? shownOf(use.name, true) : undefined;
       return shown === undefined ? undefined : valueLatex(shown);
     };
     const value = shownOf(line.symbol);

@@ -39,11 +39,6 @@ export const eps: RelationSymbol = { symbol: 'eps', quantity: 'void fraction of 
 export const eta: RelationSymbol = { symbol: 'eta', quantity: 'fin efficiency', unit: '1' };
 export const F: RelationSymbol = { symbol: 'F', quantity: 'factor on the Nusselt number', unit: '1' };
 export const f: RelationSymbol = { symbol: 'f', quantity: 'Darcy friction factor', unit: '1' };
-export const f_go: RelationSymbol = {
-  symbol: 'f_go',
-  quantity: 'Darcy friction factor with all mass as vapour',
-  unit: '1',
-};
 export const f_lo: RelationSymbol = {
   symbol: 'f_lo',
   quantity: 'Darcy friction factor with all mass as liquid',

@@ -72,7 +72,7 @@ export const bankDrop: RelationFamily = {
       accuracy: '',
       source: `Taborek in ${exchangerHandbook} sec. 3.3; ${kakacLiu}`,
       confirmed: true,
-      notes: 'The coefficients join at Re 10, 100, 1000 and 1e4.',
+      notes: 'The coefficients join within a few per cent at Re 10, 100, 1000 and 1e4.',
     },
     {
       id: 'bell-delaware-f-45',
@@ -95,7 +95,7 @@ export const bankDrop: RelationFamily = {
       accuracy: '',
       source: `Taborek in ${exchangerHandbook} sec. 3.3; ${kakacLiu}`,
       confirmed: true,
-      notes: 'The coefficients join at Re 10, 100, 1000 and 1e4.',
+      notes: 'The coefficients join within a few per cent at Re 10, 100, 1000 and 1e4.',
     },
     {
       id: 'bell-delaware-f-90',
@@ -118,7 +118,7 @@ export const bankDrop: RelationFamily = {
       accuracy: '',
       source: `Taborek in ${exchangerHandbook} sec. 3.3; ${kakacLiu}`,
       confirmed: true,
-      notes: 'The coefficients join at Re 10, 100, 1000 and 1e4.',
+      notes: 'The coefficients join within a few per cent at Re 10, 100, 1000 and 1e4.',
     },
     {
       id: 'jakob-1938-bank-staggered',

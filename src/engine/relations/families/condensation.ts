@@ -146,7 +146,7 @@ export const condensation: RelationFamily = {
       title: 'Inside a tube: Shah',
       authors: 'Shah',
       year: '1979',
-      inputs: [m_dot, xq, D, rho_l, mu_l, k_l, cp_l, P, P_c],
+      inputs: [m_dot, xq, D, mu_l, k_l, cp_l, P, P_c],
       formula: [
         'G = m_dot/(pi*D^2/4)',
         'hl = 0.023*(G*D/mu_l)^0.8*(cp_l*mu_l/k_l)^0.4*k_l/D',

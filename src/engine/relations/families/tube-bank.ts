@@ -234,7 +234,7 @@ export const tubeBank: RelationFamily = {
       accuracy: '',
       source: `Taborek in ${exchangerHandbook} sec. 3.3; ${kakacLiu}; Serth`,
       confirmed: true,
-      notes: 'The coefficients join at Re 10, 100, 1000 and 1e4.',
+      notes: 'The coefficients join within a few per cent at Re 10, 100, 1000 and 1e4.',
     },
     {
       id: 'grimison-1937-bank',
@@ -349,7 +349,7 @@ export const tubeBank: RelationFamily = {
       source: `Taborek in ${exchangerHandbook} sec. 3.3; ${kakacLiu}; Serth`,
       confirmed: true,
       notes:
-        'The coefficients join at Re 10, 100, 1000 and 1e4. From Re 10 to 100 the first coefficient is 1.498; 0.498, often printed, breaks the joint by a factor of 3.',
+        'The coefficients join within a few per cent at Re 10, 100, 1000 and 1e4. From Re 10 to 100 the first coefficient is 1.498; 0.498, often printed, breaks the joint by a factor of 3.',
     },
     {
       id: 'bell-delaware-j-90',
@@ -372,7 +372,7 @@ export const tubeBank: RelationFamily = {
       accuracy: '',
       source: `Taborek in ${exchangerHandbook} sec. 3.3; ${kakacLiu}; Serth`,
       confirmed: true,
-      notes: 'The coefficients join at Re 10, 100, 1000 and 1e4.',
+      notes: 'The coefficients join within a few per cent at Re 10, 100, 1000 and 1e4.',
     },
     {
       id: 'bell-delaware-jc',

@@ -1,5 +1,5 @@
 import { collierThome } from '../sources';
-import { D, al, dP, dPdL, f_go, f_lo, g, m_dot, mu_g, mu_l, rho_g, rho_l, sigma, xq } from '../symbols';
+import { D, al, dP, dPdL, f_lo, g, m_dot, mu_g, mu_l, rho_g, rho_l, sigma, xq } from '../symbols';
 import type { RelationFamily } from '../types';
 
 export const twoPhaseDrop: RelationFamily = {
@@ -98,7 +98,19 @@ export const twoPhaseDrop: RelationFamily = {
       title: 'Two-phase friction: Friedel',
       authors: 'Friedel',
       year: '1979',
-      inputs: [m_dot, xq, rho_l, rho_g, mu_l, mu_g, D, f_lo, f_go, sigma, g],
+      inputs: [
+        m_dot,
+        xq,
+        rho_l,
+        rho_g,
+        mu_l,
+        mu_g,
+        D,
+        f_lo,
+        { symbol: 'f_go', quantity: 'Darcy friction factor with all mass as vapour', unit: '1' },
+        sigma,
+        g,
+      ],
       formula: [
         'G = m_dot/(pi*D^2/4)',
         'E = (1 - xq)^2 + xq^2*rho_l*f_go/(rho_g*f_lo)',
@@ -126,7 +138,15 @@ export const twoPhaseDrop: RelationFamily = {
       title: 'Two-phase friction: Müller-Steinhagen–Heck',
       authors: 'Mueller-Steinhagen & Heck',
       year: '1986',
-      inputs: [m_dot, xq, rho_l, rho_g, mu_l, mu_g, D, f_lo, f_go],
+      inputs: [
+        m_dot,
+        xq,
+        rho_l,
+        rho_g,
+        D,
+        f_lo,
+        { symbol: 'f_go', quantity: 'Darcy friction factor with all mass as vapour', unit: '1' },
+      ],
       formula: [
         'G = m_dot/(pi*D^2/4)',
         'a = f_lo/D*G^2/(2*rho_l)',
@@ -182,7 +202,15 @@ export const twoPhaseDrop: RelationFamily = {
       title: 'Two-phase friction: Chisholm',
       authors: 'Chisholm',
       year: '1973',
-      inputs: [m_dot, xq, rho_l, rho_g, mu_l, mu_g, D, f_lo, f_go],
+      inputs: [
+        m_dot,
+        xq,
+        rho_l,
+        rho_g,
+        D,
+        f_lo,
+        { symbol: 'f_go', quantity: 'Darcy friction factor with all mass as vapour', unit: '1' },
+      ],
       formula: [
         'G = m_dot/(pi*D^2/4)',
         'a = f_lo/D*G^2/(2*rho_l)',
@@ -206,7 +234,7 @@ export const twoPhaseDrop: RelationFamily = {
       title: 'Two-phase friction, refrigerants: Grönnerud',
       authors: 'Gronnerud',
       year: '1972',
-      inputs: [m_dot, xq, rho_l, rho_g, mu_l, mu_g, D, f_lo, f_go, g],
+      inputs: [m_dot, xq, rho_l, rho_g, mu_l, mu_g, D, f_lo, g],
       formula: [
         'G = m_dot/(pi*D^2/4)',
         'Fr = G^2/(g*D*rho_l^2)',

@@ -1,0 +1,24 @@
+import { describe, expect, it } from 'vitest';
+import { fluidState } from 'src/composables/fluidState';
+
+const figure = (text: string | undefined) => Number(text?.replace(/[\s\u00a0]/g, '') ?? Number.NaN);
+
+describe('a state of a fluid', () => {
+  it('is that of IAPWS R7-97(2012), table 5: T = 300 K, p = 3 MPa', () => {
+    const { row, problems } = fluidState('water', { T: '300 K', p: '3 MPa' });
+    expect(problems).toEqual([]);
+    expect(row?.phase).toBe('liquid');
+    const value = (property: string) => row?.values.find((one) => one.property === property);
+    // h = 115.331273 kJ/kg, s = 0.392294792 kJ/(kg K); shown to six figures.
+    expect(value('h')?.unit).toBe('kJ/kg');
+    expect(figure(value('h')?.text)).toBeCloseTo(115.331, 3);
+    expect(figure(value('s')?.text)).toBeCloseTo(0.392295, 6);
+    expect(value('h')?.quantity).toBe('specific enthalpy');
+  });
+
+  it('says in words what is wrong with the inputs', () => {
+    expect(fluidState('water', { T: '300 bar', p: '3 MPa' })).toMatchObject({ problems: [expect.any(String)] });
+    expect(fluidState('water', { T: '', p: '3 MPa' }).problems.length).toBeGreaterThan(0);
+    expect(fluidState('water', { T: '', p: '3 MPa' }).row).toBeUndefined();
+  });
+});
