@@ -92,6 +92,11 @@ export async function openStage(): Promise<Stage> {
       running = await start(database, running.port);
     },
     async close() {
+      if (process.env.WALLFLUX_PICTURES !== undefined) {
+        for (const [index, page] of browser.contexts().flatMap((context) => context.pages()).entries()) {
+          await page.screenshot({ path: `${process.env.WALLFLUX_PICTURES}/window-${index}.png` });
+        }
+      }
       await browser.close();
       await running.close();
       await database.drop();
