@@ -57,7 +57,8 @@ export function useCellCommands({ connection, cells, writable, focusing, askRema
     if (writingId.value !== undefined) connection.tell(writingId.value, false);
     writingId.value = undefined;
     const last = cells.value.at(-1)?.id ?? null;
-    penAfter.value = after === last ? undefined : after;
+    // An empty sheet has no pen line at its end: there it is opened on top.
+    penAfter.value = last !== null && after === last ? undefined : after;
     await nextTick();
     const pens = [...window.document.querySelectorAll<HTMLElement>('[data-pen]')];
     const pen = penAfter.value === undefined ? pens.at(-1) : pens[0];

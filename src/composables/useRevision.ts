@@ -66,12 +66,19 @@ export function useRevision(calculationId: string, letter: Readonly<Ref<string |
   const latest = computed(() => detail.value?.revisions.at(-1)?.letter ?? '');
   const isLatest = computed(() => latest.value === detail.value?.revision.letter);
 
+  const inCheck = computed(() => detail.value?.revision.state === 'for check');
+  /** What is corrected while it is checked voids the signature of those who prepared it. */
+  const standsAsPrepared = computed(
+    () => inCheck.value && (detail.value?.revision.signatures.some(({ meaning }) => meaning === 'prepared') ?? false),
+  );
+
   /** The one next action of this person, if there is one. */
   const nextAct = computed<NextAct | undefined>(() => {
     const own = detail.value?.revision.letter ?? '';
     if (acts.value.has('revision.lock')) return { kind: 'lock', word: `Lock revision ${own}` };
     if (acts.value.has('revision.check')) return { kind: 'check', word: 'Sign the check' };
-    if (acts.value.has('revision.handOver')) return { kind: 'handOver', word: 'Hand over for check' };
+    if (acts.value.has('revision.handOver') && !standsAsPrepared.value)
+      return { kind: 'handOver', word: inCheck.value ? 'Sign again as prepared' : 'Hand over for check' };
     if (acts.value.has('revision.begin') && isLatest.value)
       return { kind: 'begin', word: `Begin revision ${nextLetter(own)}` };
     return undefined;

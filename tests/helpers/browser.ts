@@ -118,3 +118,8 @@ export async function write(page: Page, number: string, text: string): Promise<v
   // An open list of names takes the first Escape.
   if (await cell(page, number).locator('.cm-content').first().isVisible()) await page.keyboard.press('Escape');
 }
+
+/** All that a cell says, without spaces: figures stand in two parts, before and behind the decimal sign. */
+export async function said(page: Page, number: string): Promise<string> {
+  return ((await cell(page, number).textContent()) ?? '').replace(/\s+/g, '');
+}

@@ -1,104 +1,73 @@
-import { z } from 'zod';
-import {
-  findSubstance,
-  propertyDefinitions,
-  waterBackgroundConductivity,
-  waterViscosity,
-  type PropertyId,
-  type State,
-  type StateInputs,
-  type Substance,
-} from '#engine';
+import { findSubstance, type Outcome, type PropertyId, type State, type Substance } from '#engine';
 import { readCsv } from './csv';
+import { missingInputs, propertyRow, saturationProperties, stateInputsOf, type PropertyRow } from './property-row';
 import { agrees, Skips, type Summary } from './summary';
 
-const number = z.union([z.literal(''), z.coerce.number()]).transform((value) => (value === '' ? undefined : value));
-const row = z.object({
-  substance: z.string().min(1),
-  property: z.string().min(1),
-  T_K: number,
-  p_Pa: number,
-  inputs: z
-    .string()
-    .transform((text) =>
-      text === '' ? {} : z.record(z.string(), z.union([z.number(), z.string(), z.boolean()])).parse(JSON.parse(text)),
-    ),
-  expected: z.coerce.number(),
-  rel_tol: z.coerce.number(),
-  id: z.string().default(''),
-});
-type Row = z.infer<typeof row>;
+/** A value, why there is none, or that the product does not carry what is asked. */
+type Got = { value: number } | { failure: string } | { skip: string };
 
-/** Inputs that a state takes; anything else selects a variant of the formulation. */
-const stateKeys = ['T', 'p', 'x', 'h', 's', 'rho'] as const;
-/** Keys that name a variant which is the product's own. */
-const variantKeys: readonly string[] = ['phase', 'critical_enhancement', 'transport'];
-const saturationProperties: readonly string[] = ['p_sat', 'T_sat', 'h_fg', 'sigma'];
+const notCarried = (state: State, property: PropertyId): boolean =>
+  state.missing[property]?.code === 'PROPERTY_NOT_AVAILABLE';
 
-function inputsOf(record: Row): StateInputs {
-  const inputs: StateInputs = {};
-  if (record.T_K !== undefined) inputs.T = record.T_K;
-  if (record.p_Pa !== undefined) inputs.p = record.p_Pa;
-  for (const key of stateKeys) {
-    const value = record.inputs[key];
-    if (typeof value === 'number') inputs[key] = value;
-  }
-  const { phase } = record.inputs;
-  if (phase === 'liquid' || phase === 'gas') inputs.phase = phase;
-  return inputs;
+function fromState(outcome: Outcome<State>, property: PropertyId, substance: Substance): Got {
+  if (!outcome.ok) return { failure: outcome.error.message };
+  const value = outcome.value.values[property];
+  if (value !== undefined) return { value };
+  return notCarried(outcome.value, property)
+    ? { skip: `${property} of ${substance.id} is not carried` }
+    : { failure: outcome.value.missing[property]?.message ?? 'no value' };
 }
 
-/** Why a row asks for something that the product does not carry; undefined when it does. */
-function notCarried(record: Row, substance: Substance): string | undefined {
-  if (!(record.property in propertyDefinitions)) return `${record.property} is no property of the product`;
-  if (record.inputs.eos !== undefined) return `${record.substance} by ${String(record.inputs.eos)}`;
-  const keys = Object.keys(record.inputs).filter(
-    (key) => !(stateKeys as readonly string[]).includes(key) && !variantKeys.includes(key),
-  );
-  if (keys.length > 0) return `input ${keys.join(', ')}`;
-  const inputs = Object.keys(inputsOf(record)).filter((key) => key !== 'phase');
-  const takes = substance.inputs.some(
-    (pair) => pair.length === inputs.length && pair.every((key) => inputs.includes(key)),
-  );
-  const saturation = saturationProperties.includes(record.property) && inputs.length === 1;
-  return takes || saturation ? undefined : `inputs ${inputs.join(', ') || 'none'} of ${record.substance}`;
+function fromSaturation(row: PropertyRow, substance: Substance): Got {
+  const { T, p } = stateInputsOf(row, substance);
+  const pair = substance.saturation?.(T === undefined ? { p: p ?? NaN } : { T });
+  if (pair === undefined) return { skip: `${row.property} of ${substance.id} is not carried` };
+  if (!pair.ok) return { failure: pair.error.message };
+  const { h_fg, sigma } = pair.value;
+  const values: Record<string, number | undefined> = { p_sat: pair.value.p, T_sat: pair.value.T, h_fg, sigma };
+  const value = values[row.property];
+  return value === undefined ? { skip: `${row.property} of ${substance.id} is not carried` } : { value };
 }
 
-function valueOf(record: Row, substance: Substance): number | string {
-  const { rho: density } = inputsOf(record);
-  if (
-    substance.id === 'water' &&
-    record.inputs.critical_enhancement === false &&
-    record.T_K !== undefined &&
-    density !== undefined
-  ) {
-    // Verification tables of the transport equations by themselves, also where R7-97 has no state.
-    return record.property === 'mu'
-      ? waterViscosity(record.T_K, density)
-      : waterBackgroundConductivity(record.T_K, density);
+/** The transport equations by themselves, as their papers' tables give them. */
+function fromTransport(row: PropertyRow, substance: Substance): Got | undefined {
+  const { T, rho } = stateInputsOf(row, substance);
+  const { property } = row;
+  if (T === undefined || rho === undefined || (property !== 'mu' && property !== 'k')) return undefined;
+  // Water's tables name their variant: without the enhancement, the equations alone are meant.
+  if (substance.id === 'water' && row.inputs.critical_enhancement !== false) return undefined;
+  const value = substance.transport?.(T, rho)[property];
+  return value === undefined || Number.isNaN(value) ? undefined : { value };
+}
+
+/** Enthalpy between two temperatures, at one pressure. */
+function enthalpyRise(row: PropertyRow, substance: Substance): Got {
+  const { T1, T2 } = row.inputs;
+  if (typeof T1 !== 'number' || typeof T2 !== 'number') return { skip: 'delta_h without T1 and T2' };
+  const inputs = stateInputsOf(row, substance);
+  const first = fromState(substance.state({ ...inputs, T: T1 }), 'h', substance);
+  const second = fromState(substance.state({ ...inputs, T: T2 }), 'h', substance);
+  if (!('value' in first)) return first;
+  return 'value' in second ? { value: second.value - first.value } : second;
+}
+
+function valueOf(row: PropertyRow, substance: Substance): Got {
+  const { property } = row;
+  const inputs = stateInputsOf(row, substance);
+  if (property === 'delta_h') return enthalpyRise(row, substance);
+  if (property === 'T_freeze' && substance.freezing !== undefined) {
+    const outcome = substance.freezing(inputs.massFraction);
+    return outcome.ok ? { value: outcome.value } : { failure: outcome.error.message };
   }
-  const { T, p, phase, ...rest } = inputsOf(record);
-  const property = record.property as PropertyId;
-  if (saturationProperties.includes(property) && substance.saturation !== undefined) {
-    const pair = substance.saturation(T === undefined ? { p: p ?? NaN } : { T });
-    if (!pair.ok) return pair.error.message;
-    const values: Record<string, number | undefined> = {
-      p_sat: pair.value.p,
-      T_sat: pair.value.T,
-      h_fg: pair.value.h_fg,
-      sigma: pair.value.sigma,
-    };
-    return values[property] ?? 'no value';
+  if (saturationProperties.includes(property) && inputs.x === undefined) return fromSaturation(row, substance);
+  const alone = fromTransport(row, substance);
+  if (alone !== undefined) return alone;
+  if (property === 'cp_molar') {
+    const { molarMass } = substance;
+    const got = fromState(substance.state(inputs), 'cp', substance);
+    return 'value' in got && molarMass !== undefined ? { value: got.value * molarMass } : got;
   }
-  const outcome = substance.state({
-    ...(T === undefined ? {} : { T }),
-    ...(p === undefined ? {} : { p }),
-    ...(phase === undefined ? {} : { phase }),
-    ...rest,
-  });
-  if (!outcome.ok) return outcome.error.message;
-  const state: State = outcome.value;
-  return state.values[property] ?? state.missing[property]?.message ?? 'no value';
+  return fromState(substance.state(inputs), property as PropertyId, substance);
 }
 
 /** Compares fluid properties with a CSV of check values: substance, property, T_K, p_Pa, inputs (JSON), expected, rel_tol, id. */
@@ -106,19 +75,21 @@ export function compareProperties(text: string): Summary {
   const summary: Summary = { passed: 0, failed: 0, skipped: 0, lines: [] };
   const skips = new Skips();
   for (const [index, record] of readCsv(text).entries()) {
-    const parsed = row.parse(record);
-    const substance = findSubstance(parsed.substance);
-    const reason = substance === undefined ? `${parsed.substance} is not carried` : notCarried(parsed, substance);
-    if (substance === undefined || reason !== undefined) {
-      skips.add(reason ?? '');
+    const row = propertyRow.parse(record);
+    const substance = findSubstance(row.substance);
+    if (substance === undefined) {
+      skips.add(`${row.substance} is not carried`);
       continue;
     }
-    const got = valueOf(parsed, substance);
-    if (typeof got === 'number' && agrees(got, parsed.expected, parsed.rel_tol)) summary.passed += 1;
+    const reason = missingInputs(row, substance);
+    const got: Got = reason === undefined ? valueOf(row, substance) : { skip: reason };
+    if ('skip' in got) skips.add(got.skip);
+    else if ('value' in got && agrees(got.value, row.expected, row.rel_tol)) summary.passed += 1;
     else {
       summary.failed += 1;
+      const shown = 'value' in got ? got.value : got.failure;
       summary.lines.push(
-        `row ${index + 2} ${parsed.id} ${parsed.substance} ${parsed.property}: got ${got}, expected ${parsed.expected} within ${parsed.rel_tol}`,
+        `row ${index + 2} ${row.id} ${row.substance} ${row.property}: got ${shown}, expected ${row.expected} within ${row.rel_tol}`,
       );
     }
   }

@@ -79,7 +79,16 @@ export interface Substance {
   limits: { T: [number, number]; p: [number, number] };
   /** Pairs of inputs that it takes: `['T','p']`. */
   inputs: (readonly (keyof StateInputs)[])[];
+  /** kg/mol, of pure substances and of air. */
+  molarMass?: number;
   state(inputs: StateInputs): Outcome<State>;
   /** Absent for substances without a phase change in the formulation. */
   saturation?(inputs: { T: number } | { p: number }): Outcome<SaturationPair>;
+  /** Freezing temperature in K, of the composition where it is a mixture. */
+  freezing?(massFraction?: number): Outcome<number>;
+  /**
+   * The transport equations by themselves at T in K and a density in kg/m³, zero included, as the
+   * verification tables of their papers give them (of water without critical enhancement).
+   */
+  transport?(T: number, rho: number): { mu?: number; k?: number };
 }

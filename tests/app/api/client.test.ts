@@ -1,6 +1,6 @@
 import { afterEach, describe, expect, it, vi } from 'vitest';
 import { z } from 'zod';
-import { ApiError } from 'src/api/api-error';
+import type { ApiError } from 'src/api/api-error';
 import { apiEvents, command, request } from 'src/api/client';
 
 const answer = (status: number, body: unknown) =>

@@ -16,7 +16,7 @@ function contrast(a: string, b: string): number {
 
 const source = readFileSync('src/css/tokens.scss', 'utf8');
 function theme(name: string): Map<string, string> {
-  const block = new RegExp(`\\$wf-${name}: \\(([^;]*)\\);`).exec(source)?.[1] ?? '';
+  const block = new RegExp(`\\$wf-${name}: \\(([\\s\\S]*?)\\n\\);`).exec(source)?.[1] ?? '';
   return new Map(
     [...block.matchAll(/'([a-z0-9-]+)':\s*(#[0-9A-Fa-f]{6})/g)].map((match) => [match[1] ?? '', match[2] ?? '']),
   );

@@ -1,10 +1,11 @@
-import { mount } from '@vue/test-utils';
+import { enableAutoUnmount, mount } from '@vue/test-utils';
 import { createPinia, setActivePinia } from 'pinia';
-import { beforeEach, describe, expect, it, vi } from 'vitest';
+import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import { defineComponent, h } from 'vue';
 import { pressedKeys, useShortcuts } from 'src/composables/useShortcuts';
 import { usePreferencesStore } from 'src/stores/preferences';
 
+enableAutoUnmount(afterEach);
 const run = vi.fn();
 beforeEach(() => {
   run.mockReset();

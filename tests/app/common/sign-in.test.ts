@@ -5,8 +5,11 @@ import SignInForm from 'src/components/common/SignInForm.vue';
 
 const fetched = vi.fn<typeof fetch>();
 vi.stubGlobal('fetch', fetched);
-const refusal = (status: number, code: string) =>
+const refusal = (status: number, code: string) => async () =>
   new Response(JSON.stringify({ error: { code, message: 'as the server says' } }), { status });
+const broken = async (): Promise<Response> => {
+  throw new TypeError('Failed to fetch');
+};
 const account = {
   id: '00000000-0000-4000-8000-000000000001',
   signInName: 'odile.varga',
@@ -17,11 +20,13 @@ const account = {
   active: true,
 };
 
-beforeEach(() => fetched.mockReset());
+// In braces: a function that is handed back would be called when the test ends.
+beforeEach(() => {
+  fetched.mockReset();
+});
 
-async function submitted(response: Response | Error) {
-  if (response instanceof Error) fetched.mockRejectedValue(response);
-  else fetched.mockResolvedValue(response);
+async function submitted(answer: () => Promise<Response>) {
+  fetched.mockImplementation(answer);
   const wrapper = mount(SignInForm, { props: { ended: false }, global: { plugins: [createPinia()] } });
   await wrapper.find('input[name=username]').setValue(' odile.varga ');
   await wrapper.find('input[name=password]').setValue(' velvet-heron-42');
@@ -32,7 +37,7 @@ async function submitted(response: Response | Error) {
 
 describe('signing in', () => {
   it('sends the name without spaces around it, the passphrase as written', async () => {
-    const wrapper = await submitted(new Response(JSON.stringify({ person: account })));
+    const wrapper = await submitted(async () => new Response(JSON.stringify({ person: account })));
     expect(fetched.mock.calls[0]?.[1]?.body).toBe('{"signInName":"odile.varga","password":" velvet-heron-42"}');
     expect(wrapper.emitted('done')).toHaveLength(1);
   });
@@ -41,10 +46,10 @@ describe('signing in', () => {
     ['wrong passphrase', refusal(401, 'WRONG_PASSWORD'), 'do not belong together'],
     ['too many tries', refusal(429, 'TOO_MANY_TRIES'), 'Too many tries'],
     ['empty fields', refusal(400, 'INVALID_INPUT'), 'both your name and your passphrase'],
-    ['no line', new TypeError('Failed to fetch'), 'no line to the server'],
+    ['no line', broken, 'no line to the server'],
     ['anything else', refusal(500, 'INTERNAL'), 'As the server says'],
-  ])('says in words what went wrong: %s', async (_case, response, words) => {
-    const wrapper = await submitted(response);
+  ])('says in words what went wrong: %s', async (_case, answer, words) => {
+    const wrapper = await submitted(answer);
     expect(wrapper.find('[role=alert]').text()).toContain(words);
     expect(wrapper.find('input[name=password]').attributes('aria-describedby')).toBe(
       wrapper.find('[role=alert]').attributes('id'),

@@ -108,13 +108,15 @@ describe('fins', () => {
       expect(result(id, fin), id).toBeCloseTo(1, 6);
   });
 
-  it('Schmidt is within 1 % of the exact annular fin where eta > 0.5', () => {
-    // Schmidt 1949 (from memory).
+  it('Schmidt is up to 1.6 % below the exact annular fin where eta > 0.5', () => {
+    // Schmidt 1949 states 1 % (from memory); the exact solution shows 1.6 %, which the catalogue says.
     for (const h of [20, 60, 120]) {
       const fin = { h, k_f: 200, t: 0.0005, r1: 0.0125, r2: 0.025 };
       const exact = result('fin-annular-rectangular', fin);
       expect(exact).toBeGreaterThan(0.5);
-      expect(Math.abs(result('fin-annular-schmidt', fin) / exact - 1)).toBeLessThan(0.01);
+      const low = 1 - result('fin-annular-schmidt', fin) / exact;
+      expect(low).toBeGreaterThan(0);
+      expect(low).toBeLessThan(0.0165);
     }
   });
 

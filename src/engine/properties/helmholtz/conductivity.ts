@@ -18,7 +18,14 @@ export interface CriticalEnhancement {
 }
 
 /** Universal values as in most papers since 2000. */
-export const olchowySengers = { R0: 1.03, gamma0: 0.0496, nu: 0.63, gamma: 1.239, xi0: 0.194, boltzmann: 1.3806488e-23 };
+export const olchowySengers = {
+  R0: 1.03,
+  gamma0: 0.0496,
+  nu: 0.63,
+  gamma: 1.239,
+  xi0: 0.194,
+  boltzmann: 1.3806488e-23,
+};
 
 /** Critical enhancement in W/(m·K). */
 export function criticalEnhancement(
@@ -40,9 +47,7 @@ export function criticalEnhancement(
   const delta = molarDensity / fluid.reducing.rho;
   const omega = ((cp - cv) / cp) * Math.atan(y) + (cv / cp) * y;
   const background = 1 - Math.exp(-1 / (1 / y + (y * y) / (3 * delta * delta)));
-  return (
-    ((rho * cp * R0 * boltzmann * T) / (6 * Math.PI * xi * 1e-9 * mu)) * (2 / Math.PI) * (omega - background)
-  );
+  return ((rho * cp * R0 * boltzmann * T) / (6 * Math.PI * xi * 1e-9 * mu)) * (2 / Math.PI) * (omega - background);
 }
 
 export interface LemmonJacobsenConductivity {

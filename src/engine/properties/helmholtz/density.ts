@@ -7,7 +7,14 @@ const relativeStep = 1e-13;
  * Molar density with the given pressure between two densities where the pressure rises, by Newton's
  * method with bisection where it would leave the bracket. NaN when there is none.
  */
-export function densityBetween(equation: Equation, T: number, p: number, from: number, to: number, start: number): number {
+export function densityBetween(
+  equation: Equation,
+  T: number,
+  p: number,
+  from: number,
+  to: number,
+  start: number,
+): number {
   let low = from;
   let high = to;
   let rho = Math.min(high, Math.max(low, start));

@@ -67,8 +67,7 @@ export class NonAnalytic {
     this.add += n * (w * (2 * psiD + delta * psiDD) + 2 * wD * (psi + delta * psiD) + wDD * delta * psi);
     this.at += n * delta * (wT * psi + w * psiT);
     this.att += n * delta * (wTT * psi + 2 * wT * psiT + w * psiTT);
-    this.adt +=
-      n * (w * (psiT + delta * psiDT) + delta * wD * psiT + wT * (psi + delta * psiD) + wDT * delta * psi);
+    this.adt += n * (w * (psiT + delta * psiDT) + delta * wD * psiT + wT * (psi + delta * psiD) + wDT * delta * psi);
     return true;
   }
 }

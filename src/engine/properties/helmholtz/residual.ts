@@ -145,7 +145,7 @@ export class Residual {
           const rise = (2 * width * distance) / (u * u);
           logFactor += 1 / u;
           q -= tau * rise;
-          r = -tau * rise - tau * tau * ((2 * width) / (u * u) - (2 * u * rise * rise));
+          r = -tau * rise - tau * tau * ((2 * width) / (u * u) - 2 * u * rise * rise);
         }
       }
       factor[i] = (n[i] ?? 0) * Math.exp(logFactor);

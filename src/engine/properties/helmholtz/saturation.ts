@@ -69,7 +69,13 @@ export function saturationAtTemperature(
     if (size < tolerance || (iteration > 8 && size < 1e-11)) {
       if (!(liquid > vapour * (1 + 1e-7))) return undefined;
       const p = vapour * reducing.rho * gasConstant * T * (1 + equation.residualAt(T, vapour * reducing.rho).ad);
-      return { T, p, liquid: liquid * reducing.rho, vapour: vapour * reducing.rho, slope: clapeyron(equation, T, liquid, vapour) };
+      return {
+        T,
+        p,
+        liquid: liquid * reducing.rho,
+        vapour: vapour * reducing.rho,
+        slope: clapeyron(equation, T, liquid, vapour),
+      };
     }
   }
   return undefined;

@@ -82,6 +82,8 @@ export interface ConductivityEquation {
 export interface HelmholtzFluid {
   id: string;
   name: string;
+  /** As it stands in a sentence: `nitrogen`. */
+  word: string;
   aliases: string[];
   /** As named in tables and reports: `Lemmon et al. 2000`. */
   formulation: string;

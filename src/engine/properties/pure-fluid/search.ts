@@ -41,7 +41,9 @@ export function byPressureAnd<P extends PhaseState>(
   if (state === undefined)
     return refused('OUT_OF_RANGE_STATE', {
       problem: `No temperature from ${celsius(low)} to ${celsius(high)} gives ${
-        property === 'h' ? `an enthalpy of ${plain(value / 1000)} kJ/kg` : `an entropy of ${plain(value / 1000)} kJ/(kg K)`
+        property === 'h'
+          ? `an enthalpy of ${plain(value / 1000)} kJ/kg`
+          : `an entropy of ${plain(value / 1000)} kJ/(kg K)`
       } at ${bars(p)} in ${model.formulation}`,
       p,
       [property]: value,

@@ -82,8 +82,7 @@ function mixture<P extends PhaseState>(
 
 /** The state of given vapour quality; at 0 and 1 one phase with all its properties. */
 export function byQuality<P extends PhaseState>(model: PureFluidModel<P>, given: Given, x: number): Outcome<State> {
-  if (!(x >= 0 && x <= 1))
-    return refused('OUT_OF_RANGE_QUALITY', { given: plain(x), nearest: x < 0 ? '0' : '1', x });
+  if (!(x >= 0 && x <= 1)) return refused('OUT_OF_RANGE_QUALITY', { given: plain(x), nearest: x < 0 ? '0' : '1', x });
   const found = saturatedStates(model, given);
   if (!found.ok) return found;
   if (x > 0 && x < 1) return { ok: true, value: mixture(model, found.value, x) };

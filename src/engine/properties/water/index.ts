@@ -1,6 +1,9 @@
+import { inputPairs, pureFluidSaturation, pureFluidState } from '../pure-fluid/index';
 import type { Substance } from '../types';
+import { waterModel } from './model';
+import { backgroundConductivity, viscosity } from './transport';
+
 export { backgroundConductivity as waterBackgroundConductivity, viscosity as waterViscosity } from './transport';
-import { limits, saturation, waterState } from './state';
 
 /** Water and steam by the industrial formulation. */
 export const water: Substance = {
@@ -14,15 +17,10 @@ export const water: Substance = {
     'IAPWS R1-76(2014), Surface Tension of Ordinary Water Substance',
   ],
   range: '0 to 800 °C up to 1000 bar, to 2000 °C up to 500 bar; viscosity and conductivity to 900 °C',
-  limits,
-  inputs: [
-    ['T', 'p'],
-    ['T', 'x'],
-    ['p', 'x'],
-    ['p', 'h'],
-    ['p', 's'],
-    ['T', 'rho'],
-  ],
-  state: waterState,
-  saturation,
+  limits: waterModel.limits,
+  inputs: inputPairs(waterModel),
+  molarMass: 0.018015268,
+  state: (inputs) => pureFluidState(waterModel, inputs),
+  saturation: (given) => pureFluidSaturation(waterModel, given),
+  transport: (T, rho) => ({ mu: viscosity(T, rho), k: backgroundConductivity(T, rho) }),
 };

@@ -1,0 +1,148 @@
+import type { HelmholtzFluid } from '../helmholtz/types';
+import { ammoniaConductivity } from '../helmholtz/transport/ammonia';
+import { denseViscosity } from '../helmholtz/viscosity';
+
+/** Ammonia. */
+export const ammonia: HelmholtzFluid = {
+  id: 'NH3',
+  name: 'Ammonia',
+  word: 'ammonia',
+  aliases: ['ammonia', 'R717'],
+  formulation: 'Gao et al. 2020',
+  sources: [
+    'Gao, Wu, Bell, Harvey, Lemmon, A Reference Equation of State with an Associating Term for the Thermodynamic Properties of Ammonia, J. Phys. Chem. Ref. Data 49 (2020) 013102 (published 2023 as 52, 013102)',
+    'Fenghour, Wakeham, Vesovic, Watson, Millat, Vogel, The Viscosity of Ammonia, J. Phys. Chem. Ref. Data 24 (1995) 1649',
+    'Tufeu, Ivanov, Garrabos, Le Neindre, Thermal Conductivity of Ammonia in a Large Temperature and Pressure Range Including the Critical Region, Ber. Bunsenges. Phys. Chem. 88 (1984) 422',
+    'Mulero, Cachadiña, Parra, Recommended Correlations for the Surface Tension of Common Fluids, J. Phys. Chem. Ref. Data 41 (2012) 043105',
+  ],
+  range: '−78 to 452 °C up to 10 000 bar',
+  temperature: [195.49, 725],
+  pressure: [1, 1000000000],
+  gasConstant: 8.3144598,
+  molarMass: 0.01703052,
+  reducing: { T: 405.56, rho: 13696, p: 11363391.162815327 },
+  critical: { T: 405.56, p: 11363391.1628 },
+  ideal: {
+    a1: -6.59406093943886,
+    a2: 5.60101151987913,
+    logTau: 3,
+    einstein: [
+      [2.224, 4.0585856593352405],
+      [3.148, 9.776605187888352],
+      [0.9579, 17.829667620080876],
+    ],
+  },
+  residual: {
+    power: [
+      [0.006132232, 4, 1, 0],
+      [1.7395866, 1, 0.382, 0],
+      [-2.2261792, 1, 1, 0],
+      [-0.30127553, 2, 1, 0],
+      [0.08967023, 3, 0.677, 0],
+      [-0.076387037, 3, 2.915, 2],
+      [-0.84063963, 2, 3.51, 2],
+      [-0.27026327, 3, 1.063, 1],
+    ],
+    gaussian: [
+      [6.212578, 1, 0.655, 0.42776, -0.0726, 1.708, 1.036],
+      [-5.7844357, 1, 1.3, 0.6424, -0.1274, 1.4865, 1.2777],
+      [2.4817542, 1, 3.1, 0.8175, 0.7527, 2.0915, 1.083],
+      [-2.3739168, 2, 1.4395, 0.7995, 0.57, 2.43, 1.2906],
+      [0.01493697, 2, 1.623, 0.91, 2.2, 0.488, 0.928],
+      [-3.7749264, 1, 0.643, 0.3574, -0.243, 1.1, 0.934],
+      [0.0006254348, 3, 1.13, 1.21, 2.96, 0.85, 0.919],
+      [-1.7359e-5, 3, 4.5, 4.14, 3.02, 1.14, 1.852],
+      [-0.13462033, 1, 1, 22.56, 0.9574, 945.64, 1.05897],
+      [0.07749072839, 1, 4, 22.68, 0.9576, 993.85, 1.05277],
+    ],
+    associating: [
+      [-1.6909858, 1, 4.3315, 2.8452, 0.4478, 0.3696, 1.108, 1.244],
+      [0.93739074, 1, 4.015, 2.8342, 0.44689, 0.2962, 1.313, 0.6826],
+    ],
+  },
+  saturation: {
+    pressure: {
+      T: 405.56,
+      value: 11365000,
+      terms: [
+        [-7.2257, 1],
+        [1.4263, 1.5],
+        [-0.59642, 2],
+        [-2.798, 3.6],
+        [-3.7869, 15.5],
+      ],
+    },
+    liquid: {
+      T: 405.56,
+      value: 13696,
+      terms: [
+        [2.447, 0.384],
+        [5.8341, 1.65],
+        [-25.944, 2.2],
+        [53.383, 2.75],
+        [-54.411, 3.35],
+        [22.771, 4],
+      ],
+    },
+    vapour: {
+      T: 405.56,
+      value: 13696,
+      terms: [
+        [-0.053296, 0.14],
+        [-3.4589, 0.44],
+        [-6.7572, 1.314],
+        [-17.26, 3.225],
+        [-43.12, 6.4],
+        [-115.18, 14],
+      ],
+    },
+  },
+  surface: {
+    T: 405.4,
+    terms: [
+      [0.1028, 1.211],
+      [-0.09453, 5.585],
+    ],
+  },
+  viscosity: denseViscosity({
+    dilute: {
+      factor: 2.1357,
+      molarMass: 17.03026,
+      energy: 386,
+      size: 0.2957,
+      collision: [
+        [4.9931822, 0],
+        [-0.61122364, 1],
+        [0.18535124, 3],
+        [-0.11160946, 4],
+      ],
+    },
+    initial: [
+      [-1.7999496, 0],
+      [46.692621, -0.5],
+      [-534.60794, -1],
+      [3360.4074, -1.5],
+      [-13019.164, -2],
+      [33414.23, -2.5],
+      [-58711.743, -3],
+      [71426.686, -3.5],
+      [-59834.012, -4],
+      [33652.741, -4.5],
+      [-12027.35, -5],
+      [2434.8205, -5.5],
+      [-208.07957, -6],
+    ],
+    reducing: { T: 405.4, rho: 13211.8 },
+    terms: [
+      [4.00504060098967, 3, 0, 0],
+      [-14.1079151239551, 3, 1, 0],
+      [34.7607430393218, 2, 2, 0],
+      [4.63131099013807, 4, 2, 0],
+      [-3.93737446178506, 4, 3, 0],
+      [-12.0007506836753, 2, 4, 0],
+      [1.92849779917453, 4, 4, 0],
+    ],
+  }),
+  conductivity: ammoniaConductivity,
+  uncertainty: { rho: '0.1 %', cp: '1 %', p_sat: '0.1 %', mu: '2 to 5 %', k: '2 to 4 %', Pr: '6 %' },
+};

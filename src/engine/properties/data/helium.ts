@@ -1,0 +1,108 @@
+import type { HelmholtzFluid } from '../helmholtz/types';
+import { heliumConductivity, heliumViscosity } from '../helmholtz/transport/helium';
+
+/** Helium-4 above the lambda line. */
+export const helium: HelmholtzFluid = {
+  id: 'He',
+  name: 'Helium',
+  word: 'helium',
+  aliases: ['helium', 'helium-4', 'R704'],
+  formulation: 'Ortiz-Vega et al. 2023',
+  sources: [
+    'Ortiz-Vega, Hall, Holste, Arp, Harvey, Lemmon, Helmholtz energy equation of state of helium-4 (numbers of 2019; published in J. Phys. Chem. Ref. Data 52 (2023) 043102)',
+    'Arp, McCarty, Friend, Thermophysical Properties of Helium-4 from 0.8 to 1500 K with Pressures to 2000 MPa, NIST Technical Note 1334 (1998)',
+    'Hands, Arp, A correlation of thermal conductivity data for helium, Cryogenics 21 (1981) 697',
+    'Mulero, Cachadiña, Parra, Recommended Correlations for the Surface Tension of Common Fluids, J. Phys. Chem. Ref. Data 41 (2012) 043105',
+  ],
+  range: '−271 to 1727 °C up to 10 000 bar; viscosity and conductivity to 1227 °C',
+  temperature: [2.1768, 2000],
+  pressure: [1, 1000000000],
+  gasConstant: 8.3144598,
+  molarMass: 0.004002602,
+  reducing: { T: 5.1953, rho: 17383.7, p: 228322.78679097944 },
+  critical: { T: 5.1953, p: 228326.0699 },
+  ideal: {
+    a1: 0.1871304489697973,
+    a2: 0.4848903984696551,
+    logTau: 1.5,
+  },
+  residual: {
+    power: [
+      [0.015559018, 4, 1, 0],
+      [3.0638932, 1, 0.425, 0],
+      [-4.2420844, 1, 0.63, 0],
+      [0.054418088, 2, 0.69, 0],
+      [-0.18971904, 2, 1.83, 0],
+      [0.087856262, 3, 0.575, 0],
+      [2.2833566, 1, 0.925, 1],
+      [-0.53331595, 1, 1.585, 2],
+      [-0.53296502, 3, 1.69, 2],
+      [0.99444915, 2, 1.51, 1],
+      [-0.30078896, 2, 2.9, 2],
+      [-1.6432563, 1, 0.8, 1],
+    ],
+    gaussian: [
+      [0.8029102, 2, 1.26, 1.5497, 0.596, 0.2471, 3.15],
+      [0.026838669, 1, 3.51, 9.245, 0.3423, 0.0983, 2.54505],
+      [0.04687678, 2, 2.785, 4.76323, 0.761, 0.1556, 1.2513],
+      [-0.14832766, 1, 1, 6.3826, 0.9747, 2.6782, 1.9416],
+      [0.03016211, 1, 4.22, 8.7023, 0.5868, 2.7077, 0.5984],
+      [-0.019986041, 3, 0.83, 0.255, 0.5627, 0.6621, 2.2282],
+      [0.14283514, 2, 1.575, 0.3523, 2.5346, 0.1775, 1.606],
+      [0.007418269, 2, 3.447, 0.1492, 3.6763, 0.4821, 3.815],
+      [-0.22989793, 3, 0.73, 0.05, 4.5245, 0.3069, 1.61958],
+      [0.79224829, 2, 1.634, 0.1668, 5.039, 0.1758, 0.6407],
+      [-0.049386338, 2, 6.13, 42.2358, 0.959, 1357.6577, 1.076],
+    ],
+  },
+  saturation: {
+    pressure: {
+      T: 5.1953,
+      value: 227600,
+      terms: [
+        [-2.5589967099484343, 0.981],
+        [-2.1208869241528903, 1.13],
+        [2.0304814035943877, 1.536],
+        [0.9702906562630098, 3.109],
+        [-0.006217789170073319, 0.338],
+        [-4.338734244510393, 14.431],
+      ],
+    },
+    liquid: {
+      T: 5.1953,
+      value: 18130,
+      terms: [
+        [1.8225767219916278, 0.402],
+        [-0.5212838519553242, 0.491],
+        [0.2130685389843537, 0.941],
+        [-0.44861224586106435, 1.784],
+        [5.329845315529739, 8.213],
+        [-10.020970811883176, 9.042],
+      ],
+    },
+    vapour: {
+      T: 5.1953,
+      value: 18130,
+      terms: [
+        [-0.8412289332631507, 0.211],
+        [-3.590072534944493, 0.693],
+        [2.2788760536554777, 0.749],
+        [-1.4459129841887175, 1.118],
+        [2.0638632716793297, 1.846],
+        [-14.547720153618606, 19.915],
+      ],
+    },
+  },
+  surface: {
+    T: 5.1953,
+    terms: [
+      [0.0004656, 1.04],
+      [0.001889, 2.468],
+      [-0.002006, 2.661],
+    ],
+  },
+  melting: (T) => -1606700 + 1606700 * ((T / 1) ** 1.565 - 1),
+  viscosity: heliumViscosity,
+  conductivity: heliumConductivity,
+  uncertainty: { rho: '0.05 %', cp: '1 to 2 %', p_sat: '0.1 %', mu: '1 to 10 %', k: '2 %', Pr: '5 %' },
+};
