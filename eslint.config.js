@@ -42,7 +42,7 @@ export default tseslint.config(
     plugins: { 'import-x': importX },
     languageOptions: { globals: { ...globals.browser, ...globals.node } },
     settings: {
-      'import-x/parsers': { '@typescript-eslint/parser': ['.ts', '.mts'], 'vue-eslint-parser': ['.vue'] },
+      'import-x/parsers': { '@typescript-eslint/parser': ['.ts', '.mts'] },
       'import-x/resolver-next': [createTypeScriptImportResolver({ project: './tsconfig.json' })],
     },
     rules: {

@@ -104,22 +104,23 @@ export function attachCollaboration(
     const opening = documents.get(guest.revisionId);
     // Messages that come while the document is being loaded wait for it, in their order.
     const early: Uint8Array[] = [];
-    let document: SharedDocument | undefined;
+    const seat: { document?: SharedDocument } = {};
     socket.on('message', (data: Buffer) => {
       if (!connection.withinRate()) connection.close(syncClose.tooMany, 'too many messages');
-      else if (document === undefined) early.push(data);
-      else document.receive(connection, data);
+      else if (seat.document === undefined) early.push(data);
+      else seat.document.receive(connection, data);
     });
     socket.on('pong', () => {
       connection.alive = true;
     });
     socket.on('error', () => socket.terminate());
     socket.on('close', () => {
-      if (document === undefined) return;
-      document.leave(connection);
-      documents.release(document).catch((error: unknown) => context.log.error({ error }, 'document was not folded'));
+      if (seat.document === undefined) return;
+      seat.document.leave(connection);
+      documents.release(seat.document).catch((error: unknown) => context.log.error({ error }, 'document was not folded'));
     });
-    document = await opening;
+    const document = await opening;
+    seat.document = document;
     if (document.connections.size >= mostConnectionsOfDocument) {
       connection.close(syncClose.tooMany, 'too many at this sheet');
       return;

@@ -1,4 +1,5 @@
 import type { Relation, RelationFamily } from '#engine';
+import { foldForSearch } from './searchText';
 
 export interface FoundFamily {
   family: RelationFamily;
@@ -7,14 +8,14 @@ export interface FoundFamily {
 
 function heap(relation: Relation, family: RelationFamily): string {
   const { id, title, authors, year, source, wallCondition, notes = '' } = relation;
-  return [id, title, authors, year, source, wallCondition, notes, family.title, family.geometry]
-    .join(' ')
-    .toLowerCase();
+  return foldForSearch(
+    [id, title, authors, year, source, wallCondition, notes, family.title, family.geometry].join(' '),
+  );
 }
 
 /** Families with the relations that carry every word somewhere; families without any are left out. */
 export function findRelations(families: readonly RelationFamily[], sought: string): FoundFamily[] {
-  const words = sought.toLowerCase().split(/\s+/).filter(Boolean);
+  const words = foldForSearch(sought).split(/\s+/).filter(Boolean);
   return families
     .map((family) => ({
       family,

@@ -1,13 +1,13 @@
 import {
-  evaluateRelation,
   expressionLatex,
   findRelation,
   listFamilies,
+  listRelations,
+  rankRelations,
   readRelation,
   resolveUnit,
   symbolLatex,
-  validityOf,
-  worstGrade,
+  type CatalogueEntry,
   type Geometry,
   type Relation,
   type RelationCellResult,
@@ -15,6 +15,7 @@ import {
   type RelationFamily,
   type ValidityResult,
 } from '#engine';
+import { foldForSearch } from './searchText';
 
 export interface RelationCandidate {
   relation: Relation;
@@ -47,26 +48,14 @@ export function valuesAtHand(relation: RelationCellResult | undefined): Readonly
 }
 
 function matches(relation: Relation, family: RelationFamily, words: readonly string[]): boolean {
-  const text = [relation.title, relation.authors, relation.year, relation.source, family.title, relation.wallCondition]
-    .join(' ')
-    .toLowerCase();
+  const text = foldForSearch(
+    [relation.title, relation.authors, relation.year, relation.source, family.title, relation.wallCondition].join(' '),
+  );
   return words.every((word) => text.includes(word));
 }
 
-function outputOf(relation: Relation, values: ReadonlyMap<string, number>): number | undefined {
-  if (!relation.inputs.every((input) => values.has(input.symbol))) return undefined;
-  const outcome = evaluateRelation(relation, values);
-  return outcome.ok ? outcome.value : undefined;
-}
-
-const rank: Readonly<Record<RangeGrade, number>> = { inside: 0, edge: 1, unchecked: 2, outside: 3 };
-
-function judge(relation: Relation, family: RelationFamily, values: ReadonlyMap<string, number>): RelationCandidate {
-  if (values.size === 0) return { relation, family, grade: 'unchecked', validity: [], output: undefined };
-  const output = outputOf(relation, values);
-  const all = output === undefined ? values : new Map([...values, [relation.output.symbol, output] as const]);
-  const validity = validityOf(relation, all);
-  return { relation, family, grade: worstGrade(validity.map((each) => each.grade)), validity, output };
+function unranked({ relation, family }: CatalogueEntry): RelationCandidate {
+  return { relation, family, grade: 'unchecked', validity: [], output: undefined };
 }
 
 /**
@@ -77,24 +66,16 @@ export function findCandidates(
   wanted: { geometry: Geometry | undefined; words: string; output: string | undefined },
   values: ReadonlyMap<string, number>,
 ): RelationCandidate[] {
-  const words = wanted.words.toLowerCase().split(/\s+/).filter(Boolean);
-  const candidates = listFamilies()
-    .filter((family) => wanted.geometry === undefined || family.geometry === wanted.geometry)
-    .flatMap((family) =>
-      family.relations
-        .filter((relation) => matches(relation, family, words))
-        .map((relation) => judge(relation, family, values)),
-    );
-  if (values.size === 0) return candidates;
-  const accuracy = (candidate: RelationCandidate) => candidate.relation.relativeAccuracy ?? Infinity;
-  const other = (candidate: RelationCandidate) => Number(candidate.relation.output.symbol !== wanted.output);
-  return candidates.sort(
-    (a, b) =>
-      other(a) - other(b) ||
-      Number(a.output === undefined) - Number(b.output === undefined) ||
-      rank[a.grade] - rank[b.grade] ||
-      accuracy(a) - accuracy(b),
-  );
+  const { geometry } = wanted;
+  const other = ({ relation }: RelationCandidate) => Number(relation.output.symbol !== wanted.output);
+  const words = foldForSearch(wanted.words).split(/\s+/).filter(Boolean);
+  const candidates: RelationCandidate[] =
+    values.size === 0
+      ? listRelations()
+          .filter(({ family }) => geometry === undefined || family.geometry === geometry)
+          .map(unranked)
+      : rankRelations({ geometry }, values).sort((a, b) => other(a) - other(b));
+  return candidates.filter(({ relation, family }) => matches(relation, family, words));
 }
 
 /**

@@ -5,7 +5,7 @@ import type { SheetConnection } from './sheetConnection';
 import type { SheetCell, SheetCommands } from './sheetContext';
 import { fluidBegin } from './sourceSymbols';
 import { freeName } from './penLine';
-import type { useFocusCell } from './useFocusCell';
+import { cellElement, type useFocusCell } from './useFocusCell';
 
 interface Surroundings {
   connection: SheetConnection;
@@ -40,6 +40,10 @@ export function useCellCommands({ connection, cells, writable, focusing, askRema
 
   function write(id: string): void {
     if (document() === undefined || cellOf(id) === undefined) return;
+    if (writingId.value === id) {
+      cellElement(id)?.querySelector<HTMLElement>('.cm-content')?.focus();
+      return;
+    }
     penAfter.value = undefined;
     focusing.attend(id);
     writingId.value = id;

@@ -67,7 +67,9 @@ function linearSteps(low: number, high: number): number[] {
   const power = 10 ** Math.floor(Math.log10(raw));
   const step = [1, 2, 5, 10].map((figure) => figure * power).find((each) => each >= raw) ?? raw;
   const steps: number[] = [];
-  for (let at = Math.ceil(low / step) * step; at < high; at += step) steps.push(at);
+  // Counted, not added up: a step below the last bit of the ends would never reach the high one.
+  const first = Math.ceil(low / step);
+  for (let index = 0; index < 10 && (first + index) * step < high; index += 1) steps.push((first + index) * step);
   return steps;
 }
 
@@ -143,16 +145,16 @@ function hatchOf(
   return {};
 }
 
+/** `10 000 to 120 000`, `60 and over`, `up to 2 300`. */
+export function rangeWords({ low, high, message }: Pick<ValidityResult, 'low' | 'high' | 'message'>): string {
+  if (low === undefined && high === undefined) return message;
+  if (low === undefined) return `up to ${limitText(high ?? 0)}`;
+  return high === undefined ? `${limitText(low)} and over` : `${limitText(low)} to ${limitText(high)}`;
+}
+
 /** The gauge in a sentence, for readers' software. */
 export function gaugeSentence(validity: ValidityResult): string {
   const { low, high, valueText, message, condition } = validity;
-  const given = valueText === undefined ? 'not known' : valueText;
   if (low === undefined && high === undefined) return `${condition}: ${message}`;
-  const range =
-    low === undefined
-      ? `up to ${limitText(high ?? 0)}`
-      : high === undefined
-        ? `${limitText(low)} and over`
-        : `${limitText(low)} to ${limitText(high)}`;
-  return `Case ${given}, stated range ${range}: ${message}`;
+  return `Case ${valueText ?? 'not known'}, stated range ${rangeWords(validity)}: ${message}`;
 }

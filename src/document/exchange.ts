@@ -1,5 +1,5 @@
 import type { CellInput } from '#engine';
-import * as Y from 'yjs';
+import type * as Y from 'yjs';
 import { z } from 'zod';
 import { openDocument, type CalculationDocument } from './calculation-document';
 import { calculationSettingsSchema, cellKinds, cellSettingsSchema, cellsMap, documentLimits } from './shape';

@@ -40,8 +40,7 @@ export interface CheckRow {
   reference: string;
 }
 
-/** The check values of the catalogue; every row names where its number is from. */
-export function checkRows(): CheckRow[] {
+function readRows(): CheckRow[] {
   const text = readFileSync(new URL('../check-values/relations.csv', import.meta.url), 'utf8');
   return readCsv(text).map((row) => ({
     id: row.relation_id ?? '',
@@ -50,4 +49,13 @@ export function checkRows(): CheckRow[] {
     tolerance: Number(row.relative_tolerance),
     reference: row.reference ?? '',
   }));
+}
+
+/** The check values of the catalogue; every row names where its number is from. */
+export const checkRows: readonly CheckRow[] = readRows();
+const byRelation = new Map<string, CheckRow[]>();
+for (const row of checkRows) byRelation.set(row.id, [...(byRelation.get(row.id) ?? []), row]);
+
+export function checkRowsOf(id: string): readonly CheckRow[] {
+  return byRelation.get(id) ?? [];
 }

@@ -70,8 +70,7 @@ export function evaluateExpression(expression: Expression, surroundings: Surroun
     diagnostics.push({ code, severity: 'error', message, span });
     return { type, diagnostics, waitsFor };
   }
-  const substitution =
-    uses.length === 0 ? undefined : substitutedLatex(expression, (use) => find(surroundings, keyOf(use))?.shown);
+  const substitution = uses.length === 0 ? undefined : substituted(expression, surroundings);
   return { type, value: evaluated.value, diagnostics, waitsFor, substitution };
 }
 

@@ -33,6 +33,8 @@ const remark: Remark = {
   answers: [],
 };
 
+/** Ends what a test has mounted: keys listen at the window. */
+const opened: (() => void)[] = [];
 let ticks: Tick[] = [];
 let refuseTick = false;
 const asked: { path: string; method: string; body: unknown }[] = [];
@@ -66,7 +68,7 @@ async function open(role: Role, state: RevisionState, given = cells, line = {}) 
   const router = createRouter({
     history: createMemoryHistory(),
     routes: ['sheet', 'report', 'projects', 'register', 'trail', 'fluids', 'relations', 'relation'].map((name) => ({
-      path: name === 'sheet' ? '/' : `/${name}`,
+      path: name === 'sheet' ? '/:calculationId?/:letter?' : `/${name}/:calculationId?/:letter?`,
       name,
       component: { render: () => null },
     })),
@@ -95,6 +97,7 @@ async function open(role: Role, state: RevisionState, given = cells, line = {}) 
   leaf.id = 'leaf';
   document.body.append(leaf);
   const wrapper = mount(Host, { global: { plugins: [createPinia(), router] }, attachTo: document.body });
+  opened.push(() => wrapper.unmount());
   await flushPromises();
   const cell = (cellId: string) => wrapper.get(`#cell-${cellId}`);
   const press = async (key: string, more: KeyboardEventInit = {}) => {
@@ -116,6 +119,7 @@ beforeEach(() => {
   asked.length = 0;
 });
 afterEach(() => {
+  for (const close of opened.splice(0)) close();
   document.body.innerHTML = '';
   vi.unstubAllGlobals();
 });
@@ -278,8 +282,7 @@ describe('who may do what', () => {
   });
 
   it('lets a tick fall when a value behind the cell changes, and only then', async () => {
-    const { cell, document: shared, connection } = await open('checker', 'for check');
-    const fingerprint = connection.results.value.get('b')?.fingerprint ?? '';
+    const fingerprint = localConnection(cells).connection.results.value.get('b')?.fingerprint ?? '';
     ticks = [{ cellId: 'b', person: people.checker, at: '2026-03-12T09:00:00.000Z', fingerprint, dependsOn: {} }];
     const again = await open('checker', 'for check');
     expect(again.cell('b').get('.cell__tick').attributes('aria-label')).toContain('ticked by');
@@ -293,7 +296,6 @@ describe('who may do what', () => {
     });
     await flushPromises();
     expect(again.cell('b').get('.cell__tick').attributes('aria-label')).toContain('changed since');
-    expect(cell('a').exists() && shared.cells().length).toBe(6);
   });
 
   it.each<[Role, RevisionState, string | undefined]>([
