@@ -33,7 +33,7 @@ const lazyPackages = [
 ];
 
 export default defineConfig(() => ({
-  boot: ['session', 'activity'],
+  boot: ['session', 'activity', 'prefetch'],
   css: ['fonts.css', 'app.scss'],
   extras: [],
 

@@ -21,8 +21,9 @@ export function dataDirectory() {
   return place;
 }
 
+/** Says what is being done; beside the output of the programs themselves. */
 export function say(text) {
-  console.log(`wallflux: ${text}`);
+  console.error(`wallflux: ${text}`);
 }
 
 /** Ends the script with one sentence that says what is missing and what to do. */
@@ -74,14 +75,16 @@ export function ensurePackages() {
     .update(readFileSync(join(root, 'package-lock.json')))
     .digest('hex');
   const mark = join(root, 'node_modules', '.wallflux-lock');
-  if (existsSync(mark) && readFileSync(mark, 'utf8') === lock && existsSync(join(root, '.quasar', 'tsconfig.json'))) return;
+  if (existsSync(mark) && readFileSync(mark, 'utf8') === lock && existsSync(join(root, '.quasar', 'tsconfig.json')))
+    return;
   needDiskSpace(root, 1500);
   say('installing packages (npm ci, about a minute)');
   if (!run('npm', ['ci', '--no-audit', '--no-fund', '--loglevel=error'])) {
     giveUp('the packages could not be installed; npm says why above. Mend that, then start again.');
   }
   // Writes .quasar/tsconfig.json, which every TypeScript tool here reads.
-  if (!run(join(root, 'node_modules', '.bin', 'quasar'), ['prepare'], { stdio: 'ignore' })) giveUp('quasar prepare failed; run it by hand to see why.');
+  if (!run(join(root, 'node_modules', '.bin', 'quasar'), ['prepare'], { stdio: 'ignore' }))
+    giveUp('quasar prepare failed; run it by hand to see why.');
   writeFileSync(mark, lock);
 }
 

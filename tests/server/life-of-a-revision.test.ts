@@ -1,5 +1,5 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { acts, may, type Remark, type RevisionDetail, type RevisionState, type Role, type TrailPage } from '#contract';
+import { acts, may, type Remark, type RevisionDetail, type Role, type TrailPage } from '#contract';
 import { firstBrokenEntry } from '../../src-server/repositories/trail';
 import {
   calculationIn,
@@ -159,7 +159,7 @@ describe('ticks', () => {
 
 describe('the access table', () => {
   const roles: readonly Role[] = ['engineer', 'checker', 'lead', 'reader'];
-  const states: readonly RevisionState[] = ['draft', 'for check', 'checked', 'locked'];
+  const states = ['draft', 'for check', 'checked', 'locked'] as const;
   const request = (role: Role, act: (typeof acts)[number], detail: RevisionDetail) => {
     const client = server.client[role];
     const { id } = detail.revision;
