@@ -1,7 +1,7 @@
 import { createServer, type Server } from 'node:http';
 import { pathToFileURL } from 'node:url';
 import { Pool } from 'pg';
-import { pino, type Logger } from 'pino';
+import { pino, stdSerializers, type Logger } from 'pino';
 import { createApp } from './app';
 import { attachCollaboration } from './collaboration/index';
 import { readConfig, type Config } from './config/index';
@@ -46,6 +46,7 @@ export async function startServer(config: Config, log: Logger): Promise<RunningS
   const context: ServerContext = { config, db, events: new EventBus(), mails: jobs, log };
   const summaries = new Summaries(context);
   if (config.seedDemo) await seedDemo(context, summaries);
+  await summaries.catchUp();
 
   const session = createSessionMiddleware(config, pool);
   const app = createApp({
@@ -66,11 +67,12 @@ export async function startServer(config: Config, log: Logger): Promise<RunningS
     summaries,
     catcher,
     async close() {
-      summaries.stop();
       // Websockets first: Socket.IO waits for connections that would never end by themselves.
       await collaboration.close();
       await realtime.close();
       server.closeAllConnections();
+      // After the last document is written, before the database goes.
+      await summaries.stop();
       await jobs.stop();
       await catcher?.close();
       await pool.end();
@@ -81,7 +83,7 @@ export async function startServer(config: Config, log: Logger): Promise<RunningS
 
 async function main(): Promise<void> {
   const config = readConfig(process.env);
-  const log = pino({ level: config.logLevel });
+  const log = pino({ level: config.logLevel, serializers: { error: stdSerializers.err } });
   const running = await startServer(config, log);
   log.info({ port: running.port }, 'listening');
   const stop = () => {

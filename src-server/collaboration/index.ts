@@ -3,77 +3,32 @@ import type { Duplex } from 'node:stream';
 import type { RequestHandler } from 'express';
 import { WebSocketServer, type WebSocket } from 'ws';
 import { z } from 'zod';
-import { may, syncClose, syncPath, type Account } from '#contract';
-import { sameOrigin } from '../middleware/origin';
-import { ApiError } from '../errors/index';
-import { authorizeRevision } from '../services/access';
-import type { ServerContext } from '../services/context';
+import { syncClose, syncPath } from '#contract';
+import { noticesPath } from '../realtime/index';
+import type { ServerContext, ServerEvent } from '../services/context';
 import type { Summaries } from '../services/summaries';
-import { accountOfRequest } from '../realtime/account';
+import { Admission, type Guest } from './admission';
 import { Connection } from './connection';
-import { SharedDocument } from './shared-document';
+import { Documents } from './documents';
+import { presenceMessage } from './messages';
+import { noPresence } from './presence';
+import type { SharedDocument } from './shared-document';
 
 const largestMessage = 4_000_000;
-const mostConnectionsOfDocument = 200;
-const heartbeat = 30_000;
+const mostAtDocument = 200;
+const mostOfPerson = 40;
+/** A stock client takes a line on which nothing came for 30 s to be dead. */
+const heartbeat = 15_000;
+/** Every so many beats everybody is asked anew: a session may have run out. */
+const beatsBetweenReviews = 8;
 
 export interface Collaboration {
   close(): Promise<void>;
 }
 
-interface Guest {
-  account: Account;
-  sessionId: string;
-  revisionId: string;
-  canWrite: boolean;
-}
-
-/** Open documents of this process, each loaded once. */
-class Documents {
-  private readonly open = new Map<string, Promise<SharedDocument>>();
-
-  constructor(
-    private readonly context: ServerContext,
-    private readonly summaries: Summaries,
-  ) {}
-
-  get(revisionId: string): Promise<SharedDocument> {
-    let document = this.open.get(revisionId);
-    if (document === undefined) {
-      document = SharedDocument.open(revisionId, this.context, {
-        written: (personId, voided) => {
-          this.summaries.touch(revisionId, personId);
-          if (voided) void this.tellVoided(revisionId, personId);
-        },
-      });
-      this.open.set(revisionId, document);
-      document.catch(() => this.open.delete(revisionId));
-    }
-    return document;
-  }
-
-  private async tellVoided(revisionId: string, personId: string): Promise<void> {
-    const { project } = await authorizeRevision(this.context.db, personId, revisionId, 'revision.read');
-    this.context.events.publish({ kind: 'notice', notice: { about: 'revision', projectId: project.id, revisionId } });
-  }
-
-  /** Frees a document when its last browser has gone. */
-  async release(document: SharedDocument): Promise<void> {
-    if (document.connections.size > 0) return;
-    this.open.delete(document.revisionId);
-    await document.close();
-  }
-
-  async all(): Promise<SharedDocument[]> {
-    return Promise.all(this.open.values());
-  }
-}
-
-function revisionIdOf(request: IncomingMessage): string | undefined {
-  const path = new URL(request.url ?? '', 'http://localhost').pathname;
-  if (!path.startsWith(`${syncPath}/`)) return undefined;
-  const id = path.slice(syncPath.length + 1);
-  return z.uuid().safeParse(id).success ? id : '';
+export interface CollaborationOptions {
+  /** Milliseconds between signs of life. */
+  heartbeat?: number;
 }
 
 /** Puts the sync endpoint `/sync/<revision id>` on the server's upgrades. */
@@ -82,132 +37,203 @@ export function attachCollaboration(
   session: RequestHandler,
   context: ServerContext,
   summaries: Summaries,
+  options: CollaborationOptions = {},
 ): Collaboration {
-  const sockets = new WebSocketServer({ noServer: true, maxPayload: largestMessage });
-  const documents = new Documents(context, summaries);
-
-  async function admit(request: IncomingMessage, revisionId: string): Promise<Guest | number> {
-    if (!sameOrigin(request, context.config.publicOrigin)) return syncClose.forbidden;
-    const signedIn = await accountOfRequest(request, session, context.db);
-    if (signedIn === undefined) return syncClose.notSignedIn;
-    try {
-      const { role, revision } = await authorizeRevision(context.db, signedIn.account.id, revisionId, 'revision.read');
-      return { ...signedIn, revisionId, canWrite: may(role, 'content.write', revision.state) };
-    } catch (error) {
-      if (error instanceof ApiError) return error.code === 'NOT_FOUND' ? syncClose.notFound : syncClose.forbidden;
-      throw error;
-    }
-  }
-
-  async function serve(socket: WebSocket, guest: Guest): Promise<void> {
-    const connection = new Connection(socket, guest.account, guest.sessionId, guest.canWrite);
-    const opening = documents.get(guest.revisionId);
-    // Messages that come while the document is being loaded wait for it, in their order.
-    const early: Uint8Array[] = [];
-    const seat: { document?: SharedDocument } = {};
-    socket.on('message', (data: Buffer) => {
-      if (!connection.withinRate()) connection.close(syncClose.tooMany, 'too many messages');
-      else if (seat.document === undefined) early.push(data);
-      else seat.document.receive(connection, data);
-    });
-    socket.on('pong', () => {
-      connection.alive = true;
-    });
-    socket.on('error', () => socket.terminate());
-    socket.on('close', () => {
-      if (seat.document === undefined) return;
-      seat.document.leave(connection);
-      documents.release(seat.document).catch((error: unknown) => context.log.error({ error }, 'document was not folded'));
-    });
-    const document = await opening;
-    seat.document = document;
-    if (document.connections.size >= mostConnectionsOfDocument) {
-      connection.close(syncClose.tooMany, 'too many at this sheet');
-      return;
-    }
-    document.join(connection);
-    for (const data of early) document.receive(connection, data);
-    if (socket.readyState !== socket.OPEN) {
-      document.leave(connection);
-      await documents.release(document);
-    }
-  }
-
-  const onUpgrade = (request: IncomingMessage, socket: Duplex, head: Buffer) => {
-    const revisionId = revisionIdOf(request);
-    if (revisionId === undefined) return;
-    admit(request, revisionId).then(
-      (guest) => {
-        sockets.handleUpgrade(request, socket, head, (webSocket) => {
-          // A browser can read the reason of a refusal from the close code only, not from an HTTP status.
-          if (typeof guest === 'number') webSocket.close(guest, 'refused');
-          else
-            serve(webSocket, guest).catch((error: unknown) => {
-              context.log.error({ error }, 'sync connection failed');
-              webSocket.close(1011, 'the document could not be opened');
-            });
-        });
-      },
-      (error: unknown) => {
-        context.log.error({ error }, 'sync upgrade failed');
-        socket.destroy();
-      },
-    );
-  };
+  const endpoint = new Endpoint(session, context, summaries);
+  const onUpgrade = (request: IncomingMessage, socket: Duplex, head: Buffer) => endpoint.upgrade(request, socket, head);
   server.on('upgrade', onUpgrade);
-
-  async function decide(revisionId: string, connection: Connection): Promise<boolean | undefined> {
-    try {
-      const { role, revision } = await authorizeRevision(
-        context.db,
-        connection.account.id,
-        revisionId,
-        'revision.read',
-      );
-      return may(role, 'content.write', revision.state);
-    } catch {
-      return undefined;
-    }
-  }
-
-  const endListening = context.events.listen((event) => {
-    documents
-      .all()
-      .then(async (open) => {
-        for (const document of open) {
-          if (event.kind === 'signed-out') {
-            for (const connection of document.connections)
-              if (connection.sessionId === event.sessionId) connection.close(syncClose.notSignedIn, 'signed out');
-          } else if (
-            (event.kind === 'revision-state' && event.revisionId === document.revisionId) ||
-            event.kind === 'access'
-          ) {
-            await document.review((connection) => decide(document.revisionId, connection));
-          }
-        }
-      })
-      .catch((error: unknown) => context.log.error({ error }, 'access was not reviewed'));
-  });
-
-  const beat = setInterval(() => {
-    void documents.all().then((open) => {
-      for (const connection of open.flatMap((document) => [...document.connections])) {
-        if (!connection.alive) connection.socket.terminate();
-        connection.alive = false;
-        connection.socket.ping();
-      }
-    });
-  }, heartbeat);
+  const endListening = context.events.listen((event) => endpoint.hear(event));
+  const beat = setInterval(() => endpoint.beat(), options.heartbeat ?? heartbeat);
   beat.unref();
-
   return {
     async close() {
       clearInterval(beat);
       endListening();
+      await endpoint.close();
       server.off('upgrade', onUpgrade);
-      for (const document of await documents.all()) await document.settled();
-      for (const socket of sockets.clients) socket.terminate();
-      sockets.close();
     },
   };
+}
+
+/** The path of a request; undefined when there is none that can be read. */
+function pathOf({ url = '' }: IncomingMessage): string | undefined {
+  const base = 'http://localhost';
+  return URL.canParse(url, base) ? new URL(url, base).pathname : undefined;
+}
+
+const bytesOf = (data: Buffer | ArrayBuffer | Buffer[]): Uint8Array =>
+  Array.isArray(data) ? Buffer.concat(data) : new Uint8Array(data);
+
+class Endpoint {
+  private readonly sockets = new WebSocketServer({ noServer: true, maxPayload: largestMessage });
+  private readonly admission: Admission;
+  private readonly documents: Documents;
+  private readonly connections = new Set<Connection>();
+  private readonly serving = new Set<Promise<void>>();
+  private beats = 0;
+  private closing = false;
+
+  constructor(
+    session: RequestHandler,
+    private readonly context: ServerContext,
+    summaries: Summaries,
+  ) {
+    this.admission = new Admission(session, context);
+    this.documents = new Documents(context, (revisionId) => ({
+      written: ({ guest }, voided) => {
+        summaries.touch(revisionId, guest.account.id);
+        const { projectId } = guest;
+        if (voided) context.events.publish({ kind: 'notice', notice: { about: 'revision', projectId, revisionId } });
+      },
+    }));
+  }
+
+  /** Takes an upgrade to the sync path, leaves one to the notices alone, and ends any other. */
+  upgrade(request: IncomingMessage, socket: Duplex, head: Buffer): void {
+    const path = pathOf(request);
+    if (path?.startsWith(noticesPath) === true) return;
+    // Until the socket is handed over, nobody else listens for its failure.
+    const fail = () => socket.destroy();
+    socket.on('error', fail);
+    if (path?.startsWith(`${syncPath}/`) !== true || this.closing) {
+      fail();
+      return;
+    }
+    this.admit(request, path.slice(syncPath.length + 1)).then(
+      (guest) => {
+        socket.off('error', fail);
+        this.sockets.handleUpgrade(request, socket, head, (webSocket) => this.welcome(webSocket, guest));
+      },
+      (error: unknown) => {
+        this.context.log.error({ error }, 'sync upgrade failed');
+        fail();
+      },
+    );
+  }
+
+  private async admit(request: IncomingMessage, revisionId: string): Promise<Guest | number> {
+    if (!z.uuid().safeParse(revisionId).success) return syncClose.notFound;
+    return this.admission.admit(request, revisionId);
+  }
+
+  private welcome(socket: WebSocket, guest: Guest | number): void {
+    // What is no frame, or too large a one, has ended the line with its code already.
+    socket.on('error', () => undefined);
+    // A browser can read the reason of a refusal from the close code only, not from an HTTP status.
+    if (typeof guest === 'number') {
+      socket.close(guest, 'refused');
+      return;
+    }
+    const connection = new Connection(socket, guest);
+    if (this.ofPerson(guest.account.id).length >= mostOfPerson) {
+      connection.close(syncClose.tooMany, 'too many sheets open');
+      return;
+    }
+    this.connections.add(connection);
+    const life = this.serve(connection)
+      .catch((error: unknown) => {
+        this.context.log.error({ error, revisionId: guest.revisionId }, 'sync connection failed');
+        connection.close(1011, 'the document could not be opened');
+      })
+      .finally(() => {
+        this.connections.delete(connection);
+        this.serving.delete(life);
+      });
+    this.serving.add(life);
+  }
+
+  private ofPerson(personId: string): Connection[] {
+    return [...this.connections].filter(({ account }) => account.id === personId);
+  }
+
+  /** From coming in to going. */
+  private async serve(connection: Connection): Promise<void> {
+    const { socket, guest } = connection;
+    let document: SharedDocument | undefined;
+    const work = () => {
+      if (document !== undefined) for (const data of connection.takeInbox()) document.receive(connection, data);
+    };
+    const gone = new Promise<void>((resolve) => socket.once('close', () => resolve()));
+    socket.on('pong', () => {
+      connection.alive = true;
+    });
+    // What comes while the document is being loaded waits for it, in its order.
+    socket.on('message', (data, binary) => {
+      const message = bytesOf(data);
+      if (!binary) connection.close(1003, 'the message cannot be read');
+      else if (!connection.within(message.length)) connection.close(1013, 'too many messages');
+      else {
+        connection.put(message);
+        work();
+      }
+    });
+    const seat = this.documents.sit(guest.revisionId);
+    try {
+      const opened = await seat.document;
+      if (opened.connections.size >= mostAtDocument) connection.close(syncClose.tooMany, 'too many at this sheet');
+      if (!connection.open) return;
+      opened.join(connection);
+      connection.onDecided = work;
+      // What changed since the door was told to those inside only.
+      await this.review(connection);
+      document = opened;
+      work();
+      await gone;
+      opened.leave(connection);
+    } finally {
+      seat.leave();
+    }
+  }
+
+  /** Asks anew what a person may do here; until that is known, nothing of theirs is taken. */
+  private async review(connection: Connection): Promise<void> {
+    await connection.whileDeciding(async () => {
+      try {
+        const decision = await connection.guest.decide();
+        if (typeof decision === 'number') connection.close(decision, 'no access any more');
+        else connection.writing = decision.writing;
+      } catch (error) {
+        this.context.log.error({ error }, 'access was not reviewed');
+        connection.close(1013, 'try again');
+      }
+    });
+  }
+
+  /** Takes effect on open connections at once. */
+  hear(event: ServerEvent): void {
+    for (const connection of this.connections) {
+      if (event.kind === 'signed-out') {
+        if (connection.guest.sessionId === event.sessionId) connection.close(syncClose.notSignedIn, 'signed out');
+      } else if (
+        (event.kind === 'revision-state' && event.revisionId === connection.guest.revisionId) ||
+        (event.kind === 'access' && event.personId === connection.account.id)
+      ) {
+        void this.review(connection);
+      }
+    }
+  }
+
+  beat(): void {
+    this.beats += 1;
+    for (const connection of this.connections) {
+      if (!connection.alive) {
+        connection.socket.terminate();
+        continue;
+      }
+      connection.alive = false;
+      if (connection.open) connection.socket.ping();
+      connection.send(presenceMessage(noPresence));
+      if (this.beats % beatsBetweenReviews === 0) void this.review(connection);
+    }
+  }
+
+  /** Writes and answers what was taken, then ends every connection and closes the documents. */
+  async close(): Promise<void> {
+    this.closing = true;
+    await Promise.all(this.documents.all().map((document) => document.settled()));
+    for (const socket of this.sockets.clients) socket.terminate();
+    await Promise.allSettled(this.serving);
+    await this.documents.freed();
+    this.sockets.close();
+  }
 }

@@ -11,16 +11,16 @@ export type Incoming =
   | { kind: 'ask'; stateVector: Uint8Array }
   /** `first` for the answer to the server's own question: what was written before the line was there. */
   | { kind: 'update'; update: Uint8Array; first: boolean }
-  | { kind: 'awareness'; update: Uint8Array }
-  | { kind: 'query awareness' }
+  | { kind: 'presence'; update: Uint8Array }
+  | { kind: 'query presence' }
   | { kind: 'unknown' };
 
 /** Reads a message; throws on one that is malformed. */
 export function readMessage(data: Uint8Array): Incoming {
   const decoder = decoding.createDecoder(data);
   const kind = decoding.readVarUint(decoder);
-  if (kind === message.queryAwareness) return { kind: 'query awareness' };
-  if (kind === message.awareness) return { kind: 'awareness', update: decoding.readVarUint8Array(decoder) };
+  if (kind === message.queryAwareness) return { kind: 'query presence' };
+  if (kind === message.awareness) return { kind: 'presence', update: decoding.readVarUint8Array(decoder) };
   if (kind !== message.sync) return { kind: 'unknown' };
   const step = decoding.readVarUint(decoder);
   const content = decoding.readVarUint8Array(decoder);
@@ -29,8 +29,6 @@ export function readMessage(data: Uint8Array): Incoming {
     return { kind: 'ask', stateVector: content };
   }
   if (step !== sync.step2 && step !== sync.update) return { kind: 'unknown' };
-  // Decoded here, so that a malformed one is refused before anything is done with it.
-  Y.decodeUpdate(content);
   return { kind: 'update', update: content, first: step === sync.step2 };
 }
 
@@ -49,7 +47,7 @@ export const answerMessage = (doc: Y.Doc, stateVector: Uint8Array): Uint8Array =
   write(number(message.sync), number(sync.step2), bytes(Y.encodeStateAsUpdate(doc, stateVector)));
 export const updateMessage = (update: Uint8Array): Uint8Array =>
   write(number(message.sync), number(sync.update), bytes(update));
-export const awarenessMessage = (update: Uint8Array): Uint8Array => write(number(message.awareness), bytes(update));
+export const presenceMessage = (update: Uint8Array): Uint8Array => write(number(message.awareness), bytes(update));
 
 /** How many updates of a connection are in the database, and whether its first answer is. */
 export const keptMessage = (updates: number, first: boolean, at: number): Uint8Array =>

@@ -44,7 +44,7 @@ export function readConfig(variables: NodeJS.ProcessEnv): Config {
     host: values.HOST,
     databaseUrl: values.DATABASE_URL,
     sessionSecret: values.SESSION_SECRET,
-    publicOrigin: values.PUBLIC_ORIGIN ?? `http://localhost:${values.PORT}`,
+    publicOrigin: new URL(values.PUBLIC_ORIGIN ?? `http://localhost:${values.PORT}`).origin,
     smtpUrl: values.SMTP_URL,
     mailFrom: values.MAIL_FROM,
     seedDemo: values.WALLFLUX_SEED === 'demo',

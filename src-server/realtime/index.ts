@@ -7,6 +7,9 @@ import { authorizeProject, authorizeRevision } from '../services/access';
 import type { ServerContext } from '../services/context';
 import { accountOfRequest } from './account';
 
+/** Where Socket.IO listens. */
+export const noticesPath = '/socket.io';
+
 export interface Realtime {
   close(): Promise<void>;
 }
@@ -22,6 +25,7 @@ const revisionRoom = (id: string) => `revision:${id}`;
 /** Live notices over Socket.IO: who watches a revision or a project is told what to fetch again. */
 export function attachRealtime(server: Server, session: RequestHandler, context: ServerContext): Realtime {
   const io = new SocketServer<object, { notice(notice: Notice): void }, object, SocketData>(server, {
+    path: noticesPath,
     destroyUpgrade: false,
     serveClient: false,
     maxHttpBufferSize: 10_000,

@@ -88,8 +88,9 @@ export async function insertAnswer(
   await db('remark_answers').insert(row);
 }
 
-export async function setRemarkClosed(db: Database, id: string, closed: boolean): Promise<void> {
-  await db('remarks').where({ id }).update({ closed });
+/** Answers whether that was a change. */
+export async function setRemarkClosed(db: Database, id: string, closed: boolean): Promise<boolean> {
+  return (await db('remarks').where({ id, closed: !closed }).update({ closed })) > 0;
 }
 
 export async function listTicks(db: Database, revisionId: string): Promise<Tick[]> {
@@ -128,6 +129,7 @@ export async function setTick(
     .merge();
 }
 
-export async function deleteTick(db: Database, revisionId: string, cellId: string): Promise<void> {
-  await db('ticks').where({ revision_id: revisionId, cell_id: cellId }).delete();
+/** Answers whether there was one. */
+export async function deleteTick(db: Database, revisionId: string, cellId: string): Promise<boolean> {
+  return (await db('ticks').where({ revision_id: revisionId, cell_id: cellId }).delete()) > 0;
 }

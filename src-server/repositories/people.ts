@@ -95,7 +95,11 @@ export async function updatePerson(db: Database, id: string, change: PersonChang
   return row && accountOf(row);
 }
 
-/** Ends every session of a person. */
-export async function deleteSessions(db: Database, personId: string): Promise<void> {
-  await db('session').whereRaw(`sess #>> '{passport,user}' = ?`, [personId]).delete();
+/** Ends every session of a person; answers their ids. */
+export async function deleteSessions(db: Database, personId: string): Promise<string[]> {
+  const rows = await db('session')
+    .whereRaw(`sess #>> '{passport,user}' = ?`, [personId])
+    .delete()
+    .returning<{ sid: string }[]>('sid');
+  return rows.map(({ sid }) => sid);
 }

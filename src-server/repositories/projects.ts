@@ -48,10 +48,12 @@ export async function listMembers(db: Database, projectIds: readonly string[]): 
   return members;
 }
 
+/** The part of a person in a project; somebody who was deactivated has none any more. */
 export async function roleOf(db: Database, projectId: string, personId: string): Promise<Role | undefined> {
-  const row = await db('project_members')
-    .where({ project_id: projectId, person_id: personId })
-    .first<{ role: Role } | undefined>('role');
+  const row = await db('project_members as m')
+    .join('people as p', 'p.id', 'm.person_id')
+    .where({ 'm.project_id': projectId, 'm.person_id': personId, 'p.active': true })
+    .first<{ role: Role } | undefined>('m.role');
   return row?.role;
 }
 
@@ -62,8 +64,9 @@ export async function setMember(db: Database, projectId: string, personId: strin
     .merge(['role']);
 }
 
-export async function removeMember(db: Database, projectId: string, personId: string): Promise<void> {
-  await db('project_members').where({ project_id: projectId, person_id: personId }).delete();
+/** Answers whether the person was a member. */
+export async function removeMember(db: Database, projectId: string, personId: string): Promise<boolean> {
+  return (await db('project_members').where({ project_id: projectId, person_id: personId }).delete()) > 0;
 }
 
 /** E-mail addresses of active members, those of some roles only when asked. */

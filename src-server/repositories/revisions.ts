@@ -43,17 +43,19 @@ export async function insertRevision(
   return inserted.id;
 }
 
-export async function updateRevision(
-  db: Database,
-  id: string,
-  change: Partial<Omit<RevisionRow, 'id'>>,
-): Promise<void> {
-  const json = (value: unknown) => (value === undefined ? {} : { toJson: JSON.stringify(value) });
-  const { content, results, versions, reasons, ...plain } = change;
-  const documents = { content, results, versions, reasons };
-  const columns: Record<string, unknown> = { ...plain };
-  for (const [name, value] of Object.entries(documents)) if (value !== undefined) columns[name] = json(value).toJson;
-  await db('revisions').where({ id }).update(columns);
+/** A change of a revision's row; the time of a lock is the database's own. */
+export type RevisionChange = Partial<Omit<RevisionRow, 'id' | 'locked_at'>> & { locked_at?: 'now' };
+
+const jsonColumns: readonly string[] = ['content', 'results', 'versions', 'reasons'];
+
+export async function updateRevision(db: Database, id: string, change: RevisionChange): Promise<void> {
+  const columns = Object.entries(change)
+    .filter(([, value]) => value !== undefined)
+    .map(([name, value]): [string, unknown] => {
+      if (name === 'locked_at') return [name, db.fn.now()];
+      return [name, jsonColumns.includes(name) ? JSON.stringify(value) : value];
+    });
+  await db('revisions').where({ id }).update(Object.fromEntries(columns));
 }
 
 export async function listWriters(db: Database, revisionId: string): Promise<Person[]> {
@@ -77,6 +79,9 @@ export async function listSignatures(db: Database, revisionIds: readonly string[
       fingerprint: 's.fingerprint',
       signed_at: 's.signed_at',
       ...personColumns('p'),
+      // A signature keeps the name under which it was given.
+      person_name: db.raw('coalesce(s.signed_name, p.name)'),
+      person_initials: db.raw('coalesce(s.signed_initials, p.initials)'),
     });
   const signatures = new Map<string, Signature[]>(revisionIds.map((id) => [id, []]));
   for (const row of rows) {
@@ -90,12 +95,27 @@ export async function listSignatures(db: Database, revisionIds: readonly string[
   return signatures;
 }
 
+/** Everybody who ever signed a revision as prepared, void signatures counted. */
+export async function listPreparers(db: Database, revisionId: string): Promise<string[]> {
+  return db('signatures')
+    .where({ revision_id: revisionId, meaning: 'prepared' })
+    .distinct()
+    .pluck<string[]>('person_id');
+}
+
+/** Signs with the name as it is now; an earlier signature of the same meaning becomes void. */
 export async function insertSignature(
   db: Database,
-  row: { revision_id: string; person_id: string; meaning: Meaning; fingerprint: string },
+  row: { revision_id: string; meaning: Meaning; fingerprint: string },
+  person: Person,
 ): Promise<void> {
   await voidSignatures(db, row.revision_id, row.meaning);
-  await db('signatures').insert(row);
+  await db('signatures').insert({
+    ...row,
+    person_id: person.id,
+    signed_name: person.name,
+    signed_initials: person.initials,
+  });
 }
 
 /** Voids the valid signatures of a revision (of one meaning only, when given); answers how many. */

@@ -8,6 +8,8 @@ export function applicationRoutes(folder: string): Router {
   const router = Router();
   const page = join(folder, 'index.html');
   const html = existsSync(page) ? readFileSync(page, 'utf8') : undefined;
+  // Before the static files: the page goes out with a nonce only.
+  router.get('/index.html', (_request, response) => response.redirect('/'));
   router.use('/assets', express.static(join(folder, 'assets'), { immutable: true, maxAge: '1y', fallthrough: false }));
   router.use(express.static(folder, { index: false, maxAge: '1h' }));
   router.get('/{*path}', (_request, response) => {

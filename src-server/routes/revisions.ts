@@ -8,23 +8,23 @@ import {
   returnRequest,
   setTickRequest,
 } from '#contract';
-import { limitTries } from '../middleware/rate-limit';
+import { limitSigning } from '../middleware/rate-limit';
 import type { ServerContext } from '../services/context';
+import { lockRevision } from '../services/locking';
 import { answerRemark, askRemark, remarksOf, setClosed } from '../services/remarks';
 import { returnRevision, revisionConditions, revisionContent, revisionDetail } from '../services/revisions';
-import { handOver, lockRevision, signCheck } from '../services/signing';
+import { handOver, signCheck } from '../services/signing';
 import type { Summaries } from '../services/summaries';
 import { tickCell, ticksOf, untickCell } from '../services/ticks';
+import { verifyRevision } from '../services/verification';
 import { parameter, route } from './route';
-
-const triesAtSigning = 10;
 
 export function revisionRoutes(context: ServerContext, summaries: Summaries): Router {
   const router = Router();
   const id = (params: Record<string, string>) => parameter(params, 'revisionId');
   const cell = (params: Record<string, string>) => parameter(params, 'cellId');
   const remark = (params: Record<string, string>) => parameter(params, 'remarkId');
-  const signing = [limitTries(triesAtSigning, (_body, userId) => `signing ${userId ?? ''}`)];
+  const signing = [limitSigning()];
 
   route(router, {
     method: 'get',
@@ -43,6 +43,12 @@ export function revisionRoutes(context: ServerContext, summaries: Summaries): Ro
     path: '/revisions/:revisionId/conditions',
     permission: 'revision.read',
     handle: ({ account, params }) => revisionConditions(context, account, id(params)),
+  });
+  route(router, {
+    method: 'get',
+    path: '/revisions/:revisionId/verification',
+    permission: 'revision.read',
+    handle: ({ account, params }) => verifyRevision(context, account, id(params)),
   });
   route(router, {
     method: 'get',

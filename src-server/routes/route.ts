@@ -73,7 +73,9 @@ export function route<Body = undefined, Query = undefined>(
     if (answer === undefined) response.status(definition.status ?? 204).end();
     else response.status(definition.status ?? 200).json(answer);
   };
-  router[definition.method](definition.path, ...(definition.before ?? []), handler);
+  // Kept beside the handler, so that a test can hold every declared route to what it declares.
+  const declared = Object.assign(handler, { permission: definition.permission });
+  router[definition.method](definition.path, ...(definition.before ?? []), declared);
 }
 
 /** A path parameter that the route's own path has. */

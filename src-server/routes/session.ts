@@ -2,11 +2,9 @@ import { Router, type Request, type RequestHandler } from 'express';
 import type { PassportStatic } from 'passport';
 import { signInRequest, type Session } from '#contract';
 import { ApiError } from '../errors/index';
-import { limitTries } from '../middleware/rate-limit';
+import { limitSignIn } from '../middleware/rate-limit';
 import type { ServerContext } from '../services/context';
 import { route } from './route';
-
-const triesAtSignIn = 10;
 
 const nameIn = (body: unknown): string => {
   const parsed = signInRequest.safeParse(body);
@@ -36,7 +34,7 @@ export function sessionRoutes(context: ServerContext, passport: PassportStatic):
     if (signInRequest.safeParse(request.body).success) void verify(request, response, next);
     else next(new ApiError('INVALID_INPUT', 'A name and a passphrase are needed.'));
   };
-  router.post('/session', limitTries(triesAtSignIn, nameIn), authenticate);
+  router.post('/session', ...limitSignIn(nameIn), authenticate);
 
   route(router, {
     method: 'get',

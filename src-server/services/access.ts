@@ -3,7 +3,7 @@ import type { Database } from '../db/index';
 import { forbidden, notFound, ApiError } from '../errors/index';
 import { findCalculation, type CalculationRow } from '../repositories/calculations';
 import { findProject, roleOf, type ProjectRow } from '../repositories/projects';
-import { findRevision, type RevisionRow } from '../repositories/revisions';
+import { findRevision, lockRevisionRow, type RevisionRow } from '../repositories/revisions';
 
 export interface ProjectAccess {
   project: ProjectRow;
@@ -73,6 +73,20 @@ export async function authorizeRevision(
     'WRONG_STATE',
     `Revision ${access.revision.letter} is ${access.revision.state}: nobody can ${words[act]} now.`,
   );
+}
+
+/**
+ * As `authorizeRevision`, inside a transaction and with the revision's row locked: neither its state nor
+ * its content changes until the transaction ends. To be called before anything else is locked.
+ */
+export async function authorizeChange(
+  transaction: Database,
+  personId: string,
+  revisionId: string,
+  act: Act,
+): Promise<RevisionAccess> {
+  await lockRevisionRow(transaction, revisionId);
+  return authorizeRevision(transaction, personId, revisionId, act);
 }
 
 /** The calculation, when the person is a member of its project. */

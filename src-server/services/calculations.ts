@@ -84,9 +84,9 @@ export async function createCalculation(
       act: 'calculation.create',
       sentence: `opened calculation ${number} ${request.title}`,
     });
+    if (content !== undefined) await writeContent(transaction, revision, account.id, content);
     return { calculationId: created, revisionId: revision };
   });
-  if (content !== undefined) await writeContent(context.db, revisionId, account.id, content);
   await summaries.compute(revisionId, account.id);
   context.events.publish({ kind: 'notice', notice: { about: 'trail', projectId, revisionId: null } });
   return calculationDetail(context, account, calculationId, undefined);
@@ -113,6 +113,8 @@ export async function changeCalculation(
   request: ChangeCalculationRequest,
 ): Promise<RevisionDetail> {
   const { calculation } = await authorizeCalculation(context.db, account, calculationId, 'calculation.rename');
+  const sentence = sentenceOf(calculation, request);
+  if (sentence === undefined) return calculationDetail(context, account, calculationId, undefined);
   await context.db.transaction(async (transaction) => {
     await updateCalculation(transaction, calculationId, request);
     await appendTrail(transaction, {
@@ -120,7 +122,7 @@ export async function changeCalculation(
       calculationId,
       personId: account.id,
       act: 'calculation.rename',
-      sentence: sentenceOf(calculation, request),
+      sentence,
       detail: { ...request },
     });
   });
@@ -131,8 +133,12 @@ export async function changeCalculation(
   return calculationDetail(context, account, calculationId, undefined);
 }
 
-function sentenceOf(calculation: CalculationRow, request: ChangeCalculationRequest): string {
-  return request.title === undefined
-    ? `put ${calculation.number} under "${request.group ?? ''}"`
-    : `renamed ${calculation.number} from "${calculation.title}" to "${request.title}"`;
+/** What a change does, in words; undefined when it changes nothing. */
+function sentenceOf(calculation: CalculationRow, request: ChangeCalculationRequest): string | undefined {
+  const { title = calculation.title, group = calculation.group } = request;
+  const parts = [
+    title === calculation.title ? '' : `renamed ${calculation.number} from "${calculation.title}" to "${title}"`,
+    group === calculation.group ? '' : `put ${calculation.number} under "${group}"`,
+  ].filter((part) => part !== '');
+  return parts.length === 0 ? undefined : parts.join(' and ');
 }

@@ -1,11 +1,12 @@
-import type { Condition, Conditions } from '#contract';
+import type { Condition, Conditions, Meaning, Person, Remark, RevisionState, Signature, Tick } from '#contract';
 import type { CalculationResult } from '#engine';
 import type { ExchangeCalculation } from '#document';
 import type { Database } from '../db/index';
 import { listRemarks, listTicks } from '../repositories/check';
-import { listSignatures, listWriters } from '../repositories/revisions';
+import { listPreparers, listSignatures, listWriters } from '../repositories/revisions';
 import type { RevisionAccess } from './access';
-import { computeContent, contentFingerprint, currentContent } from './documents';
+import { cellNumbers } from './cell-numbers';
+import { computeContent, contentFingerprint, currentContent, differingNames } from './documents';
 
 /** Everything that the conditions of an act are judged by, from one reading of the database. */
 export interface RevisionFacts {
@@ -13,27 +14,14 @@ export interface RevisionFacts {
   results: CalculationResult;
   fingerprint: string;
   conditions: Condition[];
+  ticks: Tick[];
+  remarks: Remark[];
+  /** Those that are not void. */
+  signatures: Signature[];
 }
 
 type Item = Condition['items'][number];
 const of = (count: number, one: string, many: string) => `${count} ${count === 1 ? one : many}`;
-
-/** Number of a cell as the sheet shows it: section and place in it. */
-function numbersOf(content: ExchangeCalculation): Map<string, string> {
-  let section = 0;
-  let within = 0;
-  return new Map(
-    content.cells.map((cell) => {
-      if (cell.kind === 'section') {
-        section += 1;
-        within = 0;
-        return [cell.id, String(section)];
-      }
-      within += 1;
-      return [cell.id, `${section}.${within}`];
-    }),
-  );
-}
 
 function ticksCondition(
   content: ExchangeCalculation,
@@ -132,20 +120,75 @@ function errorsCondition(
   };
 }
 
+function remarksCondition(remarks: readonly Remark[]): Condition {
+  const open = remarks.filter((remark) => remark.state !== 'closed').length;
+  const closed = remarks.length === 0 ? 'none asked' : `${remarks.length} of ${remarks.length} closed`;
+  return {
+    id: 'remarks',
+    met: open === 0,
+    sentence: open === 0 ? closed : `${open} of ${remarks.length} still open`,
+    items: [],
+  };
+}
+
+function recomputedCondition(content: ExchangeCalculation, results: CalculationResult): Condition {
+  const other = differingNames(content, results);
+  return {
+    id: 'recomputed',
+    met: other.length === 0,
+    sentence:
+      other.length === 0
+        ? `computed twice on the server, ${of(results.names.length, 'value', 'values')} equal to 12 digits`
+        : `the second pass gave other values for ${other.join(', ')}`,
+    items: [],
+  };
+}
+
+/** Whoever wrote in a revision, or signed it as prepared, does not check it. */
+function independenceCondition(writers: readonly Person[], preparedBy: readonly string[], personId: string): Condition {
+  const wrote = writers.some((writer) => writer.id === personId);
+  const prepared = preparedBy.includes(personId);
+  return {
+    id: 'independence',
+    met: !wrote && !prepared,
+    sentence: wrote
+      ? 'you wrote in this revision'
+      : prepared
+        ? 'you signed this revision as prepared'
+        : 'you wrote nothing in this revision',
+    items: [],
+  };
+}
+
+/** Whether the signatures that the state needs are bound to exactly what the sheet says now. */
+function signaturesCondition(state: RevisionState, signatures: readonly Signature[], fingerprint: string): Condition {
+  const needed: readonly Meaning[] = state === 'checked' ? ['prepared', 'checked'] : ['prepared'];
+  const given = needed.map((meaning) => ({
+    meaning,
+    signature: signatures.find((signature) => signature.meaning === meaning),
+  }));
+  const open = given.find(({ signature }) => signature?.fingerprint !== fingerprint);
+  const sentence =
+    open === undefined
+      ? given.map(({ meaning, signature }) => `${meaning}: ${signature?.person.name ?? ''}`).join(', ')
+      : open.signature === undefined
+        ? `not signed as ${open.meaning}, or changed since`
+        : `changed since it was signed as ${open.meaning}`;
+  return { id: 'signatures', met: open === undefined, sentence, items: [] };
+}
+
 /** Reads a revision and judges everything that may stand between it and being checked or locked. */
 export async function revisionFacts(db: Database, access: RevisionAccess, personId: string): Promise<RevisionFacts> {
   const { calculation, revision } = access;
   const content = await currentContent(db, calculation, revision);
   const results = computeContent(content);
   const fingerprint = contentFingerprint(content);
-  const numbers = numbersOf(content);
+  const numbers = cellNumbers(content);
   const ticks = await listTicks(db, revision.id);
   const remarks = await listRemarks(db, revision.id);
-  const open = remarks.filter((remark) => remark.state !== 'closed').length;
   const writers = await listWriters(db, revision.id);
   const signatures = (await listSignatures(db, [revision.id])).get(revision.id) ?? [];
-  const prepared = signatures.find((signature) => signature.meaning === 'prepared');
-  const wrote = writers.some((writer) => writer.id === personId);
+  const preparedBy = await listPreparers(db, revision.id);
   const conditions: Condition[] = [
     ticksCondition(
       content,
@@ -153,40 +196,16 @@ export async function revisionFacts(db: Database, access: RevisionAccess, person
       new Map(ticks.map((tick) => [tick.cellId, tick.fingerprint])),
       ticks.map((tick) => tick.person.name),
     ),
-    {
-      id: 'remarks',
-      met: open === 0,
-      sentence:
-        remarks.length === 0
-          ? 'none asked'
-          : open === 0
-            ? `${remarks.length} of ${remarks.length} closed`
-            : `${open} of ${remarks.length} still open`,
-      items: [],
-    },
+    remarksCondition(remarks),
     rangesCondition(content, results, numbers),
     errorsCondition(content, results, numbers),
     requirementsCondition(content, results, numbers),
     tbvCondition(content, numbers),
-    {
-      id: 'independence',
-      met: !wrote,
-      sentence: wrote ? 'you wrote in this revision' : 'you wrote nothing in this revision',
-      items: [],
-    },
-    {
-      id: 'signatures',
-      met: prepared?.fingerprint === fingerprint,
-      sentence:
-        prepared === undefined
-          ? 'not signed as prepared, or changed since'
-          : prepared.fingerprint === fingerprint
-            ? `prepared: ${prepared.person.name}`
-            : 'changed since it was signed as prepared',
-      items: [],
-    },
+    recomputedCondition(content, results),
+    independenceCondition(writers, preparedBy, personId),
+    signaturesCondition(revision.state, signatures, fingerprint),
   ];
-  return { content, results, fingerprint, conditions };
+  return { content, results, fingerprint, conditions, ticks, remarks, signatures };
 }
 
 export function conditionsOf({ fingerprint, conditions }: RevisionFacts): Conditions {

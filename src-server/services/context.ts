@@ -35,7 +35,8 @@ export interface OutgoingMail {
 
 /** Takes mails for delivery; they survive a restart. */
 export interface MailQueue {
-  enqueue(mails: readonly OutgoingMail[]): Promise<void>;
+  /** Within a transaction: no mail goes out for an act that is rolled back, none is lost for one that is not. */
+  enqueue(mails: readonly OutgoingMail[], transaction: Database): Promise<void>;
 }
 
 /** What every service works with; made once in the composition root. */

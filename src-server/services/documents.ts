@@ -1,5 +1,11 @@
 import { createHash } from 'node:crypto';
-import { evaluateCalculation, type CalculationInput, type CalculationResult } from '#engine';
+import {
+  createEngine,
+  evaluateCalculation,
+  twelveDigits,
+  type CalculationInput,
+  type CalculationResult,
+} from '#engine';
 import { canonicalJson, openDocument, toExchange, type ExchangeCalculation } from '#document';
 import * as Y from 'yjs';
 import type { Database } from '../db/index';
@@ -41,6 +47,27 @@ export async function currentContent(
 
 export function computeContent(content: CalculationInput): CalculationResult {
   return evaluateCalculation({ settings: content.settings, cells: content.cells });
+}
+
+/** Every name with its value to 12 significant digits and its SI unit: what is frozen, and compared later. */
+export function figuresOf({ names }: CalculationResult): Record<string, string> {
+  return Object.fromEntries(names.map(({ name, value }) => [name, twelveDigits(value)]));
+}
+
+/**
+ * Computes a second time on another way, as a sheet that was written from its end to its beginning;
+ * answers the names whose values differ from the first pass. None may: results depend on the sheet alone.
+ */
+export function differingNames({ settings, cells }: CalculationInput, first: CalculationResult): string[] {
+  const engine = createEngine();
+  const order = cells.map((cell) => cell.id);
+  const half = Math.floor(cells.length / 2);
+  engine.update({ settings, put: cells.slice(half) });
+  engine.update({ put: cells.slice(0, half), order });
+  const second = figuresOf(engine.result());
+  const expected = figuresOf(first);
+  const names = new Set([...Object.keys(expected), ...Object.keys(second)]);
+  return [...names].filter((name) => expected[name] !== second[name]);
 }
 
 /** SHA-256 over cells and settings: what a signature of a revision that is not locked is bound to. */

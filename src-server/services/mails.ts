@@ -1,4 +1,5 @@
 import type { Account, Role } from '#contract';
+import type { Database } from '../db/index';
 import { findAccount } from '../repositories/people';
 import { memberAddresses } from '../repositories/projects';
 import type { RevisionAccess } from './access';
@@ -12,6 +13,7 @@ function body(context: ServerContext, { project, calculation, revision }: Revisi
 
 async function send(
   context: ServerContext,
+  transaction: Database,
   access: RevisionAccess,
   to: readonly { personId: string; email: string }[],
   from: Account,
@@ -26,32 +28,43 @@ async function send(
       subject: `${access.calculation.number} ${access.revision.letter}: ${subject}`,
       text,
     }));
-  if (mails.length > 0) await context.mails.enqueue(mails);
+  if (mails.length > 0) await context.mails.enqueue(mails, transaction);
 }
 
 /** To the checker named, or to all checkers of the project. */
 export async function mailHandedOver(
   context: ServerContext,
+  transaction: Database,
   access: RevisionAccess,
   account: Account,
   checkerId: string | null,
 ): Promise<void> {
-  const checkers = await memberAddresses(context.db, access.project.id, ['checker'] satisfies Role[]);
+  const checkers = await memberAddresses(transaction, access.project.id, ['checker'] satisfies Role[]);
   const to = checkerId === null ? checkers : checkers.filter(({ personId }) => personId === checkerId);
-  await send(context, access, to, account, 'handed over for check', `${account.name} hands over for check.`);
+  await send(
+    context,
+    transaction,
+    access,
+    to,
+    account,
+    'handed over for check',
+    `${account.name} hands over for check.`,
+  );
 }
 
 export async function mailAnswered(
   context: ServerContext,
+  transaction: Database,
   access: RevisionAccess,
   account: Account,
   askedBy: string,
   number: number,
 ): Promise<void> {
-  const asker = await findAccount(context.db, askedBy);
+  const asker = await findAccount(transaction, askedBy);
   if (asker === undefined || !asker.active) return;
   await send(
     context,
+    transaction,
     access,
     [{ personId: asker.id, email: asker.email }],
     account,
@@ -60,10 +73,16 @@ export async function mailAnswered(
   );
 }
 
-export async function mailLocked(context: ServerContext, access: RevisionAccess, account: Account): Promise<void> {
-  const members = await memberAddresses(context.db, access.project.id);
+export async function mailLocked(
+  context: ServerContext,
+  transaction: Database,
+  access: RevisionAccess,
+  account: Account,
+): Promise<void> {
+  const members = await memberAddresses(transaction, access.project.id);
   await send(
     context,
+    transaction,
     access,
     members,
     account,

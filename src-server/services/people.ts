@@ -10,20 +10,22 @@ function onlyAdministrators(account: Account): void {
 
 /** The account behind a name and a password; undefined when they do not fit together, or the person is no longer active. */
 export async function signIn(
-  { db }: ServerContext,
+  { db, log }: ServerContext,
   signInName: string,
   password: string,
 ): Promise<Account | undefined> {
   const found = await findCredentials(db, { signInName });
   const fits = await passwordFits(password, found?.passwordHash);
-  return fits && found?.account.active === true ? found.account : undefined;
+  const account = fits && found?.account.active === true ? found.account : undefined;
+  // What was typed as a name may be a passphrase: only a person that exists is named.
+  log.info({ personId: found?.account.id }, account === undefined ? 'sign-in refused' : 'signed in');
+  return account;
 }
 
-/** Asks a signer for the password again; throws WRONG_PASSWORD. */
-export async function confirmPassword({ db }: ServerContext, account: Account, password: string): Promise<void> {
+/** Asks a signer for the password again. */
+export async function passwordIsRight({ db }: ServerContext, account: Account, password: string): Promise<boolean> {
   const found = await findCredentials(db, { id: account.id });
-  if (!(await passwordFits(password, found?.passwordHash)))
-    throw new ApiError('WRONG_PASSWORD', 'The passphrase is not right; nothing was signed.');
+  return passwordFits(password, found?.passwordHash);
 }
 
 export async function people({ db }: ServerContext, account: Account): Promise<Account[]> {
@@ -32,7 +34,7 @@ export async function people({ db }: ServerContext, account: Account): Promise<A
 }
 
 export async function createPerson(
-  { db }: ServerContext,
+  { db, log }: ServerContext,
   account: Account,
   request: CreatePersonRequest,
 ): Promise<Account> {
@@ -40,7 +42,9 @@ export async function createPerson(
   const { password, administrator = false, ...rest } = request;
   const passwordHash = await hashPassword(password);
   try {
-    return await insertPerson(db, { ...rest, administrator, passwordHash });
+    const created = await insertPerson(db, { ...rest, administrator, passwordHash });
+    log.info({ by: account.id, personId: created.id, administrator }, 'person brought in');
+    return created;
   } catch (error) {
     if (databaseCode(error) === '23505')
       throw new ApiError('NAME_TAKEN', `The name ${request.signInName} is taken.`, { signInName: 'is taken' });
@@ -48,8 +52,12 @@ export async function createPerson(
   }
 }
 
+/** Whether a change takes something away that open sessions still have. */
+const endsSessions = (request: ChangePersonRequest): boolean =>
+  request.active === false || request.password !== undefined || request.administrator === false;
+
 export async function changePerson(
-  { db, events }: ServerContext,
+  { db, events, log }: ServerContext,
   account: Account,
   personId: string,
   request: ChangePersonRequest,
@@ -64,8 +72,9 @@ export async function changePerson(
     passwordHash: password === undefined ? undefined : await hashPassword(password),
   });
   if (changed === undefined) throw notFound('person');
-  if (request.active === false || password !== undefined) {
-    await deleteSessions(db, personId);
+  log.info({ by: account.id, personId, changed: Object.keys(request) }, 'person changed');
+  if (endsSessions(request)) {
+    for (const sessionId of await deleteSessions(db, personId)) events.publish({ kind: 'signed-out', sessionId });
     events.publish({ kind: 'access', personId });
   }
   return changed;

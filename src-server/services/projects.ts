@@ -6,6 +6,7 @@ import {
   listMembers,
   listProjects,
   removeMember,
+  roleOf,
   setMember,
   updateProject,
   type ProjectRow,
@@ -13,6 +14,10 @@ import {
 import { appendTrail } from '../repositories/trail';
 import { authorizeProject } from './access';
 import type { ServerContext } from './context';
+
+function publish({ events }: ServerContext, projectId: string): void {
+  events.publish({ kind: 'notice', notice: { about: 'trail', projectId, revisionId: null } });
+}
 
 const projectOf = (row: ProjectRow, members: Member[], account: Account): Project => ({
   ...row,
@@ -67,9 +72,27 @@ export async function changeProject(
   projectId: string,
   request: ChangeProjectRequest,
 ): Promise<Project> {
-  await authorizeProject(context.db, account, projectId, 'project.manage');
-  const given = Object.fromEntries(Object.entries(request).filter(([, value]) => value !== undefined));
-  await updateProject(context.db, projectId, given);
+  const { project } = await authorizeProject(context.db, account, projectId, 'project.manage');
+  const given: Partial<ProjectRow> = Object.fromEntries(
+    Object.entries(request).filter(([name, value]) => value !== undefined && value !== Reflect.get(project, name)),
+  );
+  const names = Object.keys(given);
+  if (names.length > 0) {
+    await context.db.transaction(async (transaction) => {
+      await updateProject(transaction, projectId, given);
+      await appendTrail(transaction, {
+        projectId,
+        personId: account.id,
+        act: 'project.change',
+        sentence: `changed ${names.join(', ')} of the project`,
+        detail: {
+          from: names.map((name) => String(Reflect.get(project, name))).join('; '),
+          to: Object.values(given).join('; '),
+        },
+      });
+    });
+    publish(context, projectId);
+  }
   return projectById(context, account, projectId);
 }
 
@@ -83,6 +106,7 @@ export async function putMember(
   await authorizeProject(context.db, account, projectId, 'project.manage');
   const person = await findAccount(context.db, personId);
   if (person === undefined) throw notFound('person');
+  if ((await roleOf(context.db, projectId, personId)) === role) return projectById(context, account, projectId);
   await context.db.transaction(async (transaction) => {
     await setMember(transaction, projectId, personId, role);
     await appendTrail(transaction, {
@@ -94,6 +118,7 @@ export async function putMember(
     });
   });
   context.events.publish({ kind: 'access', personId });
+  publish(context, projectId);
   return projectById(context, account, projectId);
 }
 
@@ -107,7 +132,7 @@ export async function dropMember(
   const person = await findAccount(context.db, personId);
   if (person === undefined) throw notFound('person');
   await context.db.transaction(async (transaction) => {
-    await removeMember(transaction, projectId, personId);
+    if (!(await removeMember(transaction, projectId, personId))) throw notFound('member');
     await appendTrail(transaction, {
       projectId,
       personId: account.id,
@@ -117,5 +142,6 @@ export async function dropMember(
     });
   });
   context.events.publish({ kind: 'access', personId });
+  publish(context, projectId);
   return projectById(context, account, projectId);
 }

@@ -1,5 +1,5 @@
 import type { Account, AskRemarkRequest, Remark } from '#contract';
-import { forbidden, notFound } from '../errors/index';
+import { ApiError, forbidden, notFound } from '../errors/index';
 import {
   findRemark,
   insertAnswer,
@@ -8,8 +8,10 @@ import {
   setRemarkClosed,
   type RemarkRow,
 } from '../repositories/check';
-import { authorizeRevision, type RevisionAccess } from './access';
+import { authorizeChange, authorizeRevision, type RevisionAccess } from './access';
+import { cellNumbers } from './cell-numbers';
 import type { ServerContext } from './context';
+import { currentContent } from './documents';
 import { mailAnswered } from './mails';
 import type { Summaries } from './summaries';
 import { publish, record } from './trail';
@@ -33,14 +35,20 @@ export async function askRemark(
   request: AskRemarkRequest,
 ): Promise<Remark[]> {
   const access = await authorizeRevision(context.db, account.id, revisionId, 'remark.ask');
+  const content = await currentContent(context.db, access.calculation, access.revision);
+  const place = cellNumbers(content).get(request.cellId);
+  if (place === undefined) throw notFound('cell');
   await context.db.transaction(async (transaction) => {
+    await authorizeChange(transaction, account.id, revisionId, 'remark.ask');
     const number = await insertRemark(transaction, {
       revision_id: revisionId,
       cell_id: request.cellId,
       author_id: account.id,
       content: request.text,
     });
-    await record(transaction, account, access, 'remark.ask', `asked remark R${number}`, { cellId: request.cellId });
+    await record(transaction, account, access, 'remark.ask', `asked remark R${number} at ${place}`, {
+      cellId: request.cellId,
+    });
   });
   return told(context, summaries, access);
 }
@@ -53,7 +61,12 @@ async function remarkAccess(
 ): Promise<{ remark: RemarkRow; access: RevisionAccess }> {
   const remark = await findRemark(db, remarkId);
   if (remark === undefined) throw notFound('remark');
-  return { remark, access: await authorizeRevision(db, account.id, remark.revision_id, act) };
+  try {
+    return { remark, access: await authorizeRevision(db, account.id, remark.revision_id, act) };
+  } catch (error) {
+    // The same words as for a remark that is not there: a stranger cannot tell the two apart.
+    throw error instanceof ApiError && error.code === 'NOT_FOUND' ? notFound('remark') : error;
+  }
 }
 
 export async function answerRemark(
@@ -65,10 +78,11 @@ export async function answerRemark(
 ): Promise<Remark[]> {
   const { remark, access } = await remarkAccess(context, account, remarkId, 'remark.answer');
   await context.db.transaction(async (transaction) => {
+    await authorizeChange(transaction, account.id, remark.revision_id, 'remark.answer');
     await insertAnswer(transaction, { remark_id: remarkId, author_id: account.id, content: text });
     await record(transaction, account, access, 'remark.answer', `answered remark R${remark.number}`);
+    await mailAnswered(context, transaction, access, account, remark.author_id, remark.number);
   });
-  await mailAnswered(context, access, account, remark.author_id, remark.number);
   return told(context, summaries, access);
 }
 
@@ -83,7 +97,8 @@ export async function setClosed(
   const { remark, access } = await remarkAccess(context, account, remarkId, 'remark.close');
   if (remark.author_id !== account.id) throw forbidden('Only the one who asked a remark closes or reopens it.');
   await context.db.transaction(async (transaction) => {
-    await setRemarkClosed(transaction, remarkId, closed);
+    await authorizeChange(transaction, account.id, remark.revision_id, 'remark.close');
+    if (!(await setRemarkClosed(transaction, remarkId, closed))) return;
     await record(
       transaction,
       account,

@@ -1,6 +1,8 @@
 import { acts, may, type Account, type RevisionDetail, type RevisionEntry, type Signature } from '#contract';
 import type { ExchangeCalculation } from '#document';
+import * as Y from 'yjs';
 import type { Database } from '../db/index';
+import { ApiError, databaseCode } from '../errors/index';
 import { saveState } from '../repositories/documents';
 import {
   insertRevision,
@@ -11,16 +13,13 @@ import {
   voidSignatures,
   type RevisionRow,
 } from '../repositories/revisions';
-import { authorizeRevision, type RevisionAccess } from './access';
+import { appendTrail } from '../repositories/trail';
+import { authorizeCalculation, authorizeChange, authorizeRevision, type RevisionAccess } from './access';
 import { conditionsOf, revisionFacts } from './conditions';
 import type { ServerContext } from './context';
 import { currentContent, loadDocument } from './documents';
-import { publish, record } from './trail';
 import type { Summaries } from './summaries';
-import { authorizeCalculation } from './access';
-import { ApiError } from '../errors/index';
-import { appendTrail } from '../repositories/trail';
-import * as Y from 'yjs';
+import { publish, record } from './trail';
 
 const entryOf = (row: RevisionRow, signatures: Signature[]): RevisionEntry => ({
   id: row.id,
@@ -86,18 +85,20 @@ export async function returnRevision(
   revisionId: string,
   reason: string,
 ): Promise<RevisionDetail> {
-  const access = await authorizeRevision(context.db, account.id, revisionId, 'revision.return');
-  await context.db.transaction(async (transaction) => {
+  await authorizeRevision(context.db, account.id, revisionId, 'revision.return');
+  const access = await context.db.transaction(async (transaction) => {
+    const current = await authorizeChange(transaction, account.id, revisionId, 'revision.return');
     await voidSignatures(transaction, revisionId);
     await updateRevision(transaction, revisionId, { state: 'draft' });
     await record(
       transaction,
       account,
-      access,
+      current,
       'revision.return',
-      `returned revision ${access.revision.letter}: ${reason}`,
+      `returned revision ${current.revision.letter}: ${reason}`,
       { reason },
     );
+    return current;
   });
   context.events.publish({ kind: 'revision-state', revisionId });
   publish(context, access, 'revision', 'register', 'trail');
@@ -113,6 +114,28 @@ export function letterAfter(letter: string): string {
   return `${letterAfter(head)}A`;
 }
 
+async function writeNextRevision(
+  db: Database,
+  account: Account,
+  { calculation, revision }: RevisionAccess,
+): Promise<string> {
+  const { doc } = await loadDocument(db, revision.id);
+  const letter = letterAfter(revision.letter);
+  return db.transaction(async (transaction) => {
+    const begun = await insertRevision(transaction, { calculation_id: calculation.id, letter, begun_by: account.id });
+    await saveState(transaction, begun, Y.encodeStateAsUpdate(doc), '0');
+    await appendTrail(transaction, {
+      projectId: calculation.project_id,
+      calculationId: calculation.id,
+      revisionId: begun,
+      personId: account.id,
+      act: 'revision.begin',
+      sentence: `began revision ${letter} from ${revision.letter}`,
+    });
+    return begun;
+  });
+}
+
 /** Opens the next revision as a draft: a copy of the locked one, with the same cells. */
 export async function beginRevision(
   context: ServerContext,
@@ -124,21 +147,15 @@ export async function beginRevision(
   const latest = (await listRevisions(context.db, calculation.id)).at(-1);
   if (latest === undefined) throw new ApiError('WRONG_STATE', 'There is no revision to go on from.');
   const access = await authorizeRevision(context.db, account.id, latest.id, 'revision.begin');
-  const { doc } = await loadDocument(context.db, latest.id);
-  const letter = letterAfter(latest.letter);
-  const revisionId = await context.db.transaction(async (transaction) => {
-    const begun = await insertRevision(transaction, { calculation_id: calculation.id, letter, begun_by: account.id });
-    await saveState(transaction, begun, Y.encodeStateAsUpdate(doc), '0');
-    await appendTrail(transaction, {
-      projectId: calculation.project_id,
-      calculationId,
-      revisionId: begun,
-      personId: account.id,
-      act: 'revision.begin',
-      sentence: `began revision ${letter} from ${latest.letter}`,
-    });
-    return begun;
-  });
+  let revisionId: string;
+  try {
+    revisionId = await writeNextRevision(context.db, account, access);
+  } catch (error) {
+    // Two who begin it in the same moment: the database lets one.
+    if (databaseCode(error) === '23505')
+      throw new ApiError('WRONG_STATE', `The revision after ${latest.letter} was begun by somebody else just now.`);
+    throw error;
+  }
   await summaries.compute(revisionId, account.id);
   publish(context, access, 'revision', 'register', 'trail');
   return revisionDetail(context, account, revisionId);

@@ -1,23 +1,25 @@
-import { createHash } from 'node:crypto';
-import type { Account, CheckRequest, Condition, HandOverRequest, LockRequest, RevisionDetail } from '#contract';
-import { canonicalJson } from '#document';
-import { catalogueVersion, engineVersion, propertiesVersion, twelveDigits, type CalculationResult } from '#engine';
+import type { Account, Act, CheckRequest, Condition, HandOverRequest, RevisionDetail } from '#contract';
 import type { Database } from '../db/index';
 import { ApiError } from '../errors/index';
 import { roleOf } from '../repositories/projects';
-import { insertSignature, listRevisions, lockRevisionRow, updateRevision } from '../repositories/revisions';
-import { authorizeRevision, type RevisionAccess } from './access';
+import { insertSignature, listPreparers, listWriters, updateRevision } from '../repositories/revisions';
+import { authorizeChange, authorizeRevision, type RevisionAccess } from './access';
 import { revisionFacts, type RevisionFacts } from './conditions';
 import type { ServerContext } from './context';
-import { mailHandedOver, mailLocked } from './mails';
-import { confirmPassword } from './people';
+import { mailHandedOver } from './mails';
+import { passwordIsRight } from './people';
 import { revisionDetail } from './revisions';
 import { publish, record } from './trail';
 
-/** Conditions without which the check is not signed; and those that a lead may leave open with a reason. */
-const neededForCheck: readonly Condition['id'][] = ['ticks', 'remarks', 'errors', 'independence', 'signatures'];
-const neededForLock: readonly Condition['id'][] = ['ticks', 'remarks', 'errors', 'signatures'];
-const excusable: readonly Condition['id'][] = ['tbv', 'requirements', 'ranges'];
+/** Conditions without which the check is not signed. */
+const neededForCheck: readonly Condition['id'][] = [
+  'ticks',
+  'remarks',
+  'errors',
+  'recomputed',
+  'independence',
+  'signatures',
+];
 
 const labels: Readonly<Record<Condition['id'], string>> = {
   ticks: 'Ticks',
@@ -31,35 +33,69 @@ const labels: Readonly<Record<Condition['id'], string>> = {
   signatures: 'Signatures',
 };
 
-/** Inside the transaction of the signature: the revision's row is locked, and its content is what the signer saw. */
-async function factsForSigning(
-  transaction: Database,
-  access: RevisionAccess,
+/** Asks the signer for the passphrase again; a wrong one is written into the trail. */
+export async function confirmSigner(
+  context: ServerContext,
   account: Account,
-  act: Parameters<typeof authorizeRevision>[3],
+  access: RevisionAccess,
+  password: string,
+): Promise<void> {
+  if (await passwordIsRight(context, account, password)) return;
+  const { letter } = access.revision;
+  await context.db.transaction((transaction) =>
+    record(
+      transaction,
+      account,
+      access,
+      'revision.wrongPassphrase',
+      `gave a wrong passphrase at signing revision ${letter}`,
+    ),
+  );
+  publish(context, access, 'trail');
+  throw new ApiError('WRONG_PASSWORD', 'The passphrase is not right; nothing was signed.');
+}
+
+/** Inside the transaction of the signature: the revision's row is locked, and its content is what the signer saw. */
+export async function factsForSigning(
+  transaction: Database,
+  account: Account,
+  revisionId: string,
+  act: Act,
   shown: string,
-): Promise<RevisionFacts> {
-  await lockRevisionRow(transaction, access.revision.id);
-  await authorizeRevision(transaction, account.id, access.revision.id, act);
+): Promise<{ access: RevisionAccess; facts: RevisionFacts }> {
+  const access = await authorizeChange(transaction, account.id, revisionId, act);
   const facts = await revisionFacts(transaction, access, account.id);
   if (facts.fingerprint !== shown)
     throw new ApiError('CONTENT_CHANGED', 'The sheet changed while you looked at it. Look again, then sign.');
-  return facts;
+  return { access, facts };
 }
 
-function demand(conditions: readonly Condition[], needed: readonly Condition['id'][]): void {
+/** Throws when one of the needed conditions is open. */
+export function demand(conditions: readonly Condition[], needed: readonly Condition['id'][]): void {
   const open = conditions.filter((condition) => needed.includes(condition.id) && !condition.met);
-  if (open.some((condition) => condition.id === 'independence')) {
+  const dependent = open.find((condition) => condition.id === 'independence');
+  if (dependent !== undefined)
     throw new ApiError(
       'NOT_INDEPENDENT',
-      'You wrote in this revision: somebody who prepared nothing in it has to check it.',
+      `Somebody who prepared nothing in this revision has to check it: ${dependent.sentence}.`,
     );
-  }
   if (open.length > 0)
     throw new ApiError(
       'CONDITIONS_OPEN',
       `Still open: ${open.map((condition) => `${labels[condition.id].toLowerCase()} (${condition.sentence})`).join('; ')}.`,
     );
+}
+
+/** The checker named at hand-over is one of the project, and prepared nothing in this revision. */
+async function requireChecker(db: Database, access: RevisionAccess, checkerId: string): Promise<void> {
+  if ((await roleOf(db, access.project.id, checkerId)) !== 'checker')
+    throw new ApiError('INVALID_INPUT', 'The person named is no checker of this project.', {
+      checkerId: 'is no checker of this project',
+    });
+  const writers = await listWriters(db, access.revision.id);
+  const preparers = await listPreparers(db, access.revision.id);
+  if (preparers.includes(checkerId) || writers.some((writer) => writer.id === checkerId))
+    throw new ApiError('NOT_INDEPENDENT', 'The checker named wrote in this revision; name another one.');
 }
 
 /** Signed as prepared, and waiting for a checker. */
@@ -69,29 +105,21 @@ export async function handOver(
   revisionId: string,
   request: HandOverRequest,
 ): Promise<RevisionDetail> {
-  const access = await authorizeRevision(context.db, account.id, revisionId, 'revision.handOver');
+  const before = await authorizeRevision(context.db, account.id, revisionId, 'revision.handOver');
   const checkerId = request.checkerId ?? null;
-  if (checkerId !== null && (await roleOf(context.db, access.project.id, checkerId)) !== 'checker') {
-    throw new ApiError('INVALID_INPUT', 'The person named is no checker of this project.', {
-      checkerId: 'is no checker of this project',
-    });
-  }
-  await confirmPassword(context, account, request.password);
+  if (checkerId !== null) await requireChecker(context.db, before, checkerId);
+  await confirmSigner(context, account, before, request.password);
   await context.db.transaction(async (transaction) => {
-    const { fingerprint, content } = await factsForSigning(
+    const { access, facts } = await factsForSigning(
       transaction,
-      access,
       account,
+      revisionId,
       'revision.handOver',
       request.contentFingerprint,
     );
+    const { fingerprint, content } = facts;
     if (content.cells.length === 0) throw new ApiError('CONDITIONS_OPEN', 'An empty sheet cannot be handed over.');
-    await insertSignature(transaction, {
-      revision_id: revisionId,
-      person_id: account.id,
-      meaning: 'prepared',
-      fingerprint,
-    });
+    await insertSignature(transaction, { revision_id: revisionId, meaning: 'prepared', fingerprint }, account);
     await updateRevision(transaction, revisionId, { state: 'for check', checker_id: checkerId });
     const note = request.note === undefined || request.note === '' ? '' : `: ${request.note}`;
     await record(
@@ -102,9 +130,9 @@ export async function handOver(
       `signed revision ${access.revision.letter} as prepared and handed it over for check${note}`,
       { fingerprint, checkerId },
     );
+    await mailHandedOver(context, transaction, access, account, checkerId);
   });
-  await afterSigning(context, access);
-  await mailHandedOver(context, access, account, checkerId);
+  afterSigning(context, before);
   return revisionDetail(context, account, revisionId);
 }
 
@@ -115,23 +143,19 @@ export async function signCheck(
   revisionId: string,
   request: CheckRequest,
 ): Promise<RevisionDetail> {
-  const access = await authorizeRevision(context.db, account.id, revisionId, 'revision.check');
-  await confirmPassword(context, account, request.password);
+  const before = await authorizeRevision(context.db, account.id, revisionId, 'revision.check');
+  await confirmSigner(context, account, before, request.password);
   await context.db.transaction(async (transaction) => {
-    const { fingerprint, conditions } = await factsForSigning(
+    const { access, facts } = await factsForSigning(
       transaction,
-      access,
       account,
+      revisionId,
       'revision.check',
       request.contentFingerprint,
     );
+    const { fingerprint, conditions } = facts;
     demand(conditions, neededForCheck);
-    await insertSignature(transaction, {
-      revision_id: revisionId,
-      person_id: account.id,
-      meaning: 'checked',
-      fingerprint,
-    });
+    await insertSignature(transaction, { revision_id: revisionId, meaning: 'checked', fingerprint }, account);
     await updateRevision(transaction, revisionId, { state: 'checked' });
     await record(
       transaction,
@@ -142,92 +166,12 @@ export async function signCheck(
       { fingerprint },
     );
   });
-  await afterSigning(context, access);
+  afterSigning(context, before);
   return revisionDetail(context, account, revisionId);
 }
 
-function frozenResults(results: CalculationResult): Record<string, string> {
-  return Object.fromEntries(results.names.map(({ name, value }) => [name, twelveDigits(value)]));
-}
-
-/** Reasons for everything that is left open; throws when one is missing. */
-function reasonsFor(
-  conditions: readonly Condition[],
-  given: Readonly<Record<string, string>>,
-): { about: string; reason: string }[] {
-  const items = conditions
-    .filter((condition) => excusable.includes(condition.id))
-    .flatMap((condition) => condition.items);
-  const missing = items.filter((item) => given[item.key] === undefined);
-  if (missing.length > 0)
-    throw new ApiError(
-      'CONDITIONS_OPEN',
-      `Say why it may stay open: ${missing.map((item) => item.sentence).join('; ')}.`,
-    );
-  return items.map((item) => ({ about: item.sentence, reason: given[item.key] ?? '' }));
-}
-
-/** Signed as approved, frozen for good, in force; the revision before it is superseded in the same moment. */
-export async function lockRevision(
-  context: ServerContext,
-  account: Account,
-  revisionId: string,
-  request: LockRequest,
-): Promise<RevisionDetail> {
-  const access = await authorizeRevision(context.db, account.id, revisionId, 'revision.lock');
-  await confirmPassword(context, account, request.password);
-  await context.db.transaction(async (transaction) => {
-    const facts = await factsForSigning(transaction, access, account, 'revision.lock', request.contentFingerprint);
-    demand(facts.conditions, neededForLock);
-    const reasons = reasonsFor(facts.conditions, request.reasons ?? {});
-    const versions = { engine: engineVersion, catalogue: catalogueVersion, properties: propertiesVersion };
-    const content = { ...facts.content, state: 'locked' };
-    const results = frozenResults(facts.results);
-    const canonical = canonicalJson({ content, results, versions, reasons, changeNote: request.changeNote });
-    const fingerprint = createHash('sha256').update(canonical).digest('hex');
-    await insertSignature(transaction, {
-      revision_id: revisionId,
-      person_id: account.id,
-      meaning: 'approved',
-      fingerprint,
-    });
-    const before = (await listRevisions(transaction, access.calculation.id)).find((row) => row.state === 'locked');
-    if (before !== undefined) {
-      await updateRevision(transaction, before.id, { state: 'superseded' });
-      await record(
-        transaction,
-        account,
-        { ...access, revision: before },
-        'revision.supersede',
-        `revision ${before.letter} is superseded by ${access.revision.letter}`,
-      );
-    }
-    await updateRevision(transaction, revisionId, {
-      state: 'locked',
-      change_note: request.changeNote,
-      locked_at: new Date(),
-      content,
-      results,
-      versions,
-      reasons,
-      canonical,
-      fingerprint,
-    });
-    await record(
-      transaction,
-      account,
-      access,
-      'revision.lock',
-      `signed revision ${access.revision.letter} as approved and locked it`,
-      { fingerprint, reasons },
-    );
-  });
-  await afterSigning(context, access);
-  await mailLocked(context, access, account);
-  return revisionDetail(context, account, revisionId);
-}
-
-async function afterSigning(context: ServerContext, access: RevisionAccess): Promise<void> {
+/** Tells the open sheets and screens; only after the transaction, since they fetch anew at once. */
+export function afterSigning(context: ServerContext, access: RevisionAccess): void {
   context.events.publish({ kind: 'revision-state', revisionId: access.revision.id });
   publish(context, access, 'revision', 'register', 'trail');
 }

@@ -1,7 +1,8 @@
 import type { Account, Tick } from '#contract';
 import { ApiError, notFound } from '../errors/index';
 import { deleteTick, listTicks, setTick } from '../repositories/check';
-import { authorizeRevision, type RevisionAccess } from './access';
+import { authorizeChange, authorizeRevision, type RevisionAccess } from './access';
+import { cellNumbers } from './cell-numbers';
 import type { ServerContext } from './context';
 import { computeContent, currentContent } from './documents';
 import type { Summaries } from './summaries';
@@ -20,7 +21,8 @@ async function told(context: ServerContext, summaries: Summaries, access: Revisi
 
 /**
  * Ticks a cell for what it says now. The server computes the sheet itself; when the checker's screen
- * showed something else, the tick is refused.
+ * showed something else, the tick is refused. A change that comes in just after makes the tick fall,
+ * since it is bound to the fingerprint.
  */
 export async function tickCell(
   context: ServerContext,
@@ -32,22 +34,22 @@ export async function tickCell(
 ): Promise<Tick[]> {
   const access = await authorizeRevision(context.db, account.id, revisionId, 'tick.set');
   const content = await currentContent(context.db, access.calculation, access.revision);
-  const result = computeContent(content).cells[cellId];
-  if (result === undefined || result.kind === 'section') throw notFound('cell');
-  if (result.fingerprint !== shown)
+  const cell = computeContent(content).cells[cellId];
+  if (cell === undefined || cell.kind === 'section') throw notFound('cell');
+  const { fingerprint, dependsOn } = cell;
+  if (fingerprint !== shown)
     throw new ApiError('CONTENT_CHANGED', 'The cell changed while you looked at it. Look again, then tick.');
   await context.db.transaction(async (transaction) => {
+    await authorizeChange(transaction, account.id, revisionId, 'tick.set');
     await setTick(transaction, {
       revision_id: revisionId,
       cell_id: cellId,
       person_id: account.id,
-      fingerprint: result.fingerprint,
-      depends_on: result.dependsOn,
+      fingerprint,
+      depends_on: dependsOn,
     });
-    await record(transaction, account, access, 'tick.set', 'ticked a cell', {
-      cellId,
-      fingerprint: result.fingerprint,
-    });
+    const number = cellNumbers(content).get(cellId) ?? '';
+    await record(transaction, account, access, 'tick.set', `ticked cell ${number}`, { cellId, fingerprint });
   });
   return told(context, summaries, access);
 }
@@ -60,9 +62,14 @@ export async function untickCell(
   cellId: string,
 ): Promise<Tick[]> {
   const access = await authorizeRevision(context.db, account.id, revisionId, 'tick.set');
+  const content = await currentContent(context.db, access.calculation, access.revision);
+  // The tick of a cell that was taken out meanwhile can be taken back too: it has no number any more.
+  const number = cellNumbers(content).get(cellId);
   await context.db.transaction(async (transaction) => {
-    await deleteTick(transaction, revisionId, cellId);
-    await record(transaction, account, access, 'tick.remove', 'took back the tick of a cell', { cellId });
+    await authorizeChange(transaction, account.id, revisionId, 'tick.set');
+    if (!(await deleteTick(transaction, revisionId, cellId))) return;
+    const sentence = `took back the tick of ${number === undefined ? 'a cell that is gone' : `cell ${number}`}`;
+    await record(transaction, account, access, 'tick.remove', sentence, { cellId });
   });
   return told(context, summaries, access);
 }

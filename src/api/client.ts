@@ -12,7 +12,7 @@ export const apiEvents: {
   end: () => void;
 } = { notSignedIn: () => undefined, begin: () => undefined, end: () => undefined };
 
-const noLine = 'there is no line to the server; nothing was changed';
+const noLine = 'there is no line to the server';
 
 function address(path: string, query: Query): string {
   const pairs = Object.entries(query).flatMap(([name, value]) =>

@@ -17,6 +17,8 @@ export interface LineState {
   keptAt: number | undefined;
   /** A sentence; of `refused`. */
   reason: string;
+  /** Of `refused`: this browser holds changes that the server will not take; `tryAgain` lets go of them. */
+  letGo?: boolean;
   /** After the line came back: how many changes joined. */
   joined: number;
 }
@@ -39,6 +41,7 @@ export interface SheetConnection {
   redo(): void;
   /** Tells others in which cell one is, and whether one writes there. */
   tell(cellId: string | undefined, writing: boolean): void;
+  /** Tries the line now; of a refused sheet: begins anew from what the server has. */
   tryAgain(): void;
   forgetJoined(): void;
 }

@@ -4,13 +4,16 @@ import { computed, ref } from 'vue';
 export function useKeptCount() {
   /** Written while there was no line; goes over with the first exchange when it comes back. */
   const offline = ref(0);
+  /** Messages sent on this line, and how many of them are kept: the server counts the same ones. */
   const sent = ref(0);
   const kept = ref(0);
   const keptAt = ref<number>();
   const joined = ref(0);
+  const waiting = computed(() => offline.value + Math.max(0, sent.value - kept.value));
 
   return {
-    waiting: computed(() => offline.value + Math.max(0, sent.value - kept.value)),
+    waiting,
+    /** When the server last kept everything, in ms. */
     keptAt,
     /** How many changes joined when the line last came back. */
     joined,
@@ -34,7 +37,7 @@ export function useKeptCount() {
         joined.value = offline.value;
         offline.value = 0;
       }
-      keptAt.value = at;
+      if (waiting.value === 0) keptAt.value = at;
     },
   };
 }

@@ -11,10 +11,14 @@ import { useSyncLine } from './useSyncLine';
 /** Changes of one person within this time are one step of undo, in ms. */
 const oneStep = 500;
 
-/** Opens the shared document of a revision for a person, with everything live that belongs to it. */
+/**
+ * Opens the shared document of a revision for a person, with everything live that belongs to it. Where
+ * `mayWrite` says no, undo and redo do nothing: they would write as well.
+ */
 export function useSheetConnection(
   revisionId: string,
   person: { id: string; name: string; initials: string },
+  mayWrite: () => boolean = () => true,
 ): SheetConnection {
   const doc = new Y.Doc();
   const opened = openDocument(doc, { newId: uuidv4 });
@@ -33,6 +37,12 @@ export function useSheetConnection(
     trackedOrigins: new Set([localOrigin]),
     captureTimeout: oneStep,
   });
+  // Every act on cells is a step of its own; only what is typed in a row is one step.
+  const endStep = ({ origin }: Y.Transaction) => {
+    if (origin === localOrigin) undoManager.stopCapturing();
+  };
+  doc.on('beforeTransaction', endStep);
+  doc.on('afterTransaction', endStep);
   const canUndo = ref(false);
   const readStack = () => {
     canUndo.value = undoManager.canUndo();
@@ -46,6 +56,7 @@ export function useSheetConnection(
     doc.destroy();
   });
 
+  const writable = () => mayWrite() && line.value.kind !== 'refused' && line.value.kind !== 'waiting';
   const document = computed<CalculationDocument | undefined>(() =>
     line.value.kind === 'waiting' ? undefined : opened,
   );
@@ -62,8 +73,8 @@ export function useSheetConnection(
     awareness,
     undoManager,
     canUndo,
-    undo: () => undoManager.undo(),
-    redo: () => undoManager.redo(),
+    undo: () => (writable() ? undoManager.undo() : undefined),
+    redo: () => (writable() ? undoManager.redo() : undefined),
     tell(cellId, writing) {
       awareness.setLocalStateField('cell', cellId);
       awareness.setLocalStateField('writing', writing);

@@ -96,6 +96,10 @@ export type Condition = z.infer<typeof condition>;
 export const conditions = z.object({ contentFingerprint: z.string(), conditions: z.array(condition) });
 export type Conditions = z.infer<typeof conditions>;
 
+/** `GET /api/revisions/:revisionId/verification`: a locked revision recomputed and compared with what was signed. */
+export const verification = z.object({ sound: z.boolean(), differences: z.array(z.string()) });
+export type Verification = z.infer<typeof verification>;
+
 export const answer = z.object({ id: z.uuid(), author: person, text: z.string(), at: z.iso.datetime() });
 export const remark = z.object({
   id: z.uuid(),

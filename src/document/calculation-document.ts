@@ -1,9 +1,10 @@
 import type { CalculationChange, CalculationSettings, CellKind, CellSettings } from '#engine';
-import { generateKeyBetween } from 'fractional-indexing';
 import * as Y from 'yjs';
+import { CellIndex } from './cell-index';
 import { cellShapes } from './cells/index';
-import { inOrder, readCalculationSettings, readCell, type DocumentCell } from './read-cell';
-import { cellsMap, settingsMap } from './shape';
+import { inOrder, placeBelow, type Placed } from './places';
+import { cellParts, readCalculationSettings, type DocumentCell } from './read-cell';
+import { cellIdSchema, cellsMap, settingsMap } from './shape';
 
 /** Origin of one's own transactions: undo takes back these, and only these. */
 export const localOrigin = 'own change';
@@ -20,36 +21,71 @@ export interface NewCell {
 export interface CalculationDocument {
   readonly doc: Y.Doc;
   /** Ordered as on the sheet. Entries that are no cells are left out. */
-  cells(): DocumentCell[];
+  cells(): readonly DocumentCell[];
+  /** Ids of entries that are no cells: another program wrote them, or a newer version of this one. */
+  unreadable(): string[];
   settings(): CalculationSettings;
   source(id: string): Y.Text | undefined;
+  /** Answers the new cell's id. After a cell that is gone means at the end. */
   insertCell(cell: NewCell): string;
   duplicateCell(id: string): string;
   moveCell(id: string, after: string | null): void;
   removeCell(id: string): void;
+  /** Without a value, or with an empty one, the setting is taken out. */
   setCellSetting<Key extends keyof CellSettings>(id: string, key: Key, value: CellSettings[Key]): void;
   setSettings(settings: Partial<CalculationSettings>): void;
   /** Several acts as one: one step of undo, one message to the others. */
   transact(act: () => void): void;
-  /** Calls with what changed, ready for the engine; answers the end of it. */
+  /** Calls once a transaction with what changed by it, ready for the engine; answers the end of it. */
   observe(listener: (change: CalculationChange) => void): () => void;
 }
 
 /** What Yjs hands to a deep observer. */
 type DeepEvents = Parameters<Parameters<Y.Map<unknown>['observeDeep']>[0]>[0];
 
+/** A cell's entry of the shared map, not yet part of a document. */
+export function newCellEntry(kind: CellKind, place: string, source: string, settings: CellSettings): Y.Map<unknown> {
+  const cell = new Y.Map<unknown>();
+  cell.set('kind', kind);
+  cell.set('place', place);
+  cell.set('source', new Y.Text(source));
+  const given = Object.entries(settings).filter(([, value]) => value !== undefined && value !== '');
+  cell.set('settings', new Y.Map(given));
+  return cell;
+}
+
 class SharedCalculation implements CalculationDocument {
   private readonly map: Y.Map<unknown>;
+  private readonly listeners = new Set<(change: CalculationChange) => void>();
+  private index: CellIndex | undefined;
+  /** What the transaction that is being ended has changed so far. */
+  private change: CalculationChange | undefined;
 
   constructor(
     readonly doc: Y.Doc,
     private readonly newId: () => string,
   ) {
     this.map = doc.getMap(cellsMap);
+    this.map.observeDeep((events) => this.noteCells(events));
+    doc.getMap(settingsMap).observe(() => {
+      this.change = { ...this.change, settings: this.settings() };
+    });
+    doc.on('afterTransaction', () => this.tell());
   }
 
-  cells(): DocumentCell[] {
-    return inOrder([...this.map.entries()].flatMap(([id, value]) => readCell(id, value) ?? []));
+  cells(): readonly DocumentCell[] {
+    // Within a transaction the index is behind: its changes are announced at the end.
+    if (this.doc._transaction !== null) return new CellIndex(this.map).all();
+    return this.upToDate().all();
+  }
+
+  private upToDate(): CellIndex {
+    this.index ??= new CellIndex(this.map);
+    return this.index;
+  }
+
+  unreadable(): string[] {
+    return [...this.map.entries()].flatMap(([id, value]) => (cellParts(id, value) === undefined ? [id] : []));
   }
 
   settings(): CalculationSettings {
@@ -70,26 +106,31 @@ class SharedCalculation implements CalculationDocument {
     return source instanceof Y.Text ? source : undefined;
   }
 
-  /** A key between a cell and the one below it; `moving` does not count as a neighbour. */
-  private placeAfter(after: string | null, moving?: string): string {
-    const cells = this.cells().filter((cell) => cell.id !== moving);
-    const at = after === null ? -1 : cells.findIndex((cell) => cell.id === after);
+  private placed(): Placed[] {
+    return inOrder(
+      [...this.map.entries()].flatMap(([id, value]) => {
+        const parts = cellParts(id, value);
+        return parts === undefined ? [] : { id, place: parts.place };
+      }),
+    );
+  }
+
+  /** A key right below a cell; `moving` does not count as a neighbour. Cells that share the cell's key get new ones. */
+  private makePlace(after: string | null, moving?: string): string {
+    const cells = this.placed().filter((cell) => cell.id !== moving);
+    const at = cells.findIndex((cell) => cell.id === after);
     const index = after !== null && at < 0 ? cells.length - 1 : at;
-    const above = cells[index]?.place || null;
-    // Two cells written at one place at the same time share a key: the next greater one counts.
-    const below = cells.slice(index + 1).find((cell) => above === null || cell.place > above)?.place || null;
-    return generateKeyBetween(above, below);
+    const { place, replaced } = placeBelow(cells, index);
+    for (const cell of replaced) this.cellMap(cell.id)?.set('place', cell.place);
+    return place;
   }
 
   insertCell({ kind, after, source, settings }: NewCell): string {
-    const id = this.newId();
+    const id = cellIdSchema.parse(this.newId());
+    if (this.map.has(id)) throw new Error(`There is a cell ${id} already.`);
     this.transact(() => {
-      const cell = new Y.Map<unknown>();
-      cell.set('kind', kind);
-      cell.set('place', this.placeAfter(after));
-      cell.set('source', new Y.Text(source ?? cellShapes[kind].template));
-      cell.set('settings', new Y.Map(Object.entries(settings ?? {}).filter(([, value]) => value !== undefined)));
-      this.map.set(id, cell);
+      const text = source ?? cellShapes[kind].template;
+      this.map.set(id, newCellEntry(kind, this.makePlace(after), text, settings ?? {}));
     });
     return id;
   }
@@ -101,61 +142,62 @@ class SharedCalculation implements CalculationDocument {
   }
 
   moveCell(id: string, after: string | null): void {
-    if (after === id) return;
-    this.transact(() => this.cellMap(id)?.set('place', this.placeAfter(after, id)));
+    const ids = this.placed().map((cell) => cell.id);
+    const at = ids.indexOf(id);
+    const stands = at === 0 ? null : ids[at - 1];
+    if (at < 0 || after === id || after === stands) return;
+    this.transact(() => this.cellMap(id)?.set('place', this.makePlace(after, id)));
   }
 
   removeCell(id: string): void {
-    this.transact(() => this.map.delete(id));
+    if (this.map.has(id)) this.transact(() => this.map.delete(id));
   }
 
   setCellSetting<Key extends keyof CellSettings>(id: string, key: Key, value: CellSettings[Key]): void {
+    const settings = this.cellMap(id)?.get('settings');
+    if (!(settings instanceof Y.Map) || settings.get(key) === value) return;
     this.transact(() => {
-      const settings = this.cellMap(id)?.get('settings');
-      if (!(settings instanceof Y.Map)) return;
       if (value === undefined || value === '') settings.delete(key);
       else settings.set(key, value);
     });
   }
 
   setSettings(settings: Partial<CalculationSettings>): void {
+    const map = this.doc.getMap(settingsMap);
     this.transact(() => {
-      for (const [key, value] of Object.entries(settings)) this.doc.getMap(settingsMap).set(key, value);
+      for (const [key, value] of Object.entries(settings))
+        if (value !== undefined && map.get(key) !== value) map.set(key, value);
     });
   }
 
   observe(listener: (change: CalculationChange) => void): () => void {
-    const onCells = (events: DeepEvents) => listener(this.changeOf(events));
-    const onSettings = () => listener({ settings: this.settings() });
-    this.map.observeDeep(onCells);
-    this.doc.getMap(settingsMap).observe(onSettings);
-    return () => {
-      this.map.unobserveDeep(onCells);
-      this.doc.getMap(settingsMap).unobserve(onSettings);
+    // From here on there is something to compare with.
+    this.upToDate();
+    this.listeners.add(listener);
+    return () => this.listeners.delete(listener);
+  }
+
+  private noteCells(events: DeepEvents): void {
+    if (this.index === undefined) return;
+    const touched = new Set<string>();
+    for (const event of events) {
+      if (event.path.length > 0) touched.add(String(event.path[0]));
+      else for (const id of event.changes.keys.keys()) touched.add(id);
+    }
+    const { put, remove, reordered } = this.index.refresh(touched);
+    if (put.length === 0 && remove.length === 0 && !reordered) return;
+    this.change = {
+      ...this.change,
+      ...(put.length > 0 ? { put } : {}),
+      ...(remove.length > 0 ? { remove } : {}),
+      ...(reordered ? { order: this.index.all().map((cell) => cell.id) } : {}),
     };
   }
 
-  private changeOf(events: DeepEvents): CalculationChange {
-    const touched = new Set<string>();
-    let ordered = false;
-    for (const event of events) {
-      if (event.path.length === 0) {
-        ordered = true;
-        for (const id of event.changes.keys.keys()) touched.add(id);
-      } else {
-        touched.add(String(event.path[0]));
-        if (event.path.length === 1 && event.changes.keys.has('place')) ordered = true;
-      }
-    }
-    const cells = this.cells();
-    const present = new Map(cells.map(({ id, kind, source, settings }) => [id, { id, kind, source, settings }]));
-    const put = [...touched].flatMap((id) => present.get(id) ?? []);
-    const remove = [...touched].filter((id) => !present.has(id));
-    return {
-      put,
-      ...(remove.length > 0 ? { remove } : {}),
-      ...(ordered ? { order: cells.map((cell) => cell.id) } : {}),
-    };
+  private tell(): void {
+    const change = this.change;
+    this.change = undefined;
+    if (change !== undefined) for (const listener of [...this.listeners]) listener(change);
   }
 }
 

@@ -1,18 +1,23 @@
-import type { CellInput } from '#engine';
 import type * as Y from 'yjs';
 import { z } from 'zod';
-import { openDocument, type CalculationDocument } from './calculation-document';
-import { calculationSettingsSchema, cellKinds, cellSettingsSchema, cellsMap, documentLimits } from './shape';
+import { localOrigin, newCellEntry, type CalculationDocument } from './calculation-document';
+import { withoutPlace } from './cell-index';
+import { firstPlaces } from './places';
+import {
+  calculationSettingsSchema,
+  cellIdSchema,
+  cellKinds,
+  cellSettingsSchema,
+  cellsMap,
+  documentLimits,
+  settingsMap,
+} from './shape';
 
 export const exchangeFormat = 'wallflux-calculation';
 export const exchangeVersion = 1;
 
 const cell = z.object({
-  id: z
-    .string()
-    .min(1)
-    .max(100)
-    .regex(/^[A-Za-z0-9_-]+$/, 'letters, figures, dash and underscore only'),
+  id: cellIdSchema,
   kind: z.enum(cellKinds),
   source: z.string().max(documentLimits.sourceLength).default(''),
   settings: cellSettingsSchema.default({}),
@@ -20,7 +25,7 @@ const cell = z.object({
 
 const version1 = z.object({
   format: z.literal(exchangeFormat),
-  version: z.literal(exchangeVersion),
+  version: z.literal(exchangeVersion, 'a version of the format that this version of Wallflux does not know'),
   title: z.string().max(200).default(''),
   purpose: z.string().max(2000).optional(),
   number: z.string().max(100).optional(),
@@ -64,19 +69,24 @@ export interface ExchangeHead {
 
 /** The document in the exchange format; cells in the order of the sheet. */
 export function toExchange(document: CalculationDocument, head: ExchangeHead): ExchangeCalculation {
-  const cells: CellInput[] = document.cells().map(({ id, kind, source, settings }) => ({ id, kind, source, settings }));
-  return { format: exchangeFormat, version: exchangeVersion, ...head, settings: document.settings(), cells };
+  return {
+    format: exchangeFormat,
+    version: exchangeVersion,
+    ...head,
+    settings: document.settings(),
+    cells: document.cells().map(withoutPlace),
+  };
 }
 
 /** Writes a calculation into an empty document, with its ids. */
 export function fillDocument(doc: Y.Doc, exchange: ExchangeCalculation): void {
-  if (doc.getMap(cellsMap).size > 0) throw new Error('Only an empty document can be filled.');
-  const ids = exchange.cells.map((one) => one.id);
-  const document = openDocument(doc, { newId: () => ids.shift() ?? '' });
-  document.transact(() => {
-    document.setSettings(exchange.settings);
-    let after: string | null = null;
-    for (const { kind, source, settings } of exchange.cells)
-      after = document.insertCell({ kind, after, source, settings });
-  });
+  const map = doc.getMap(cellsMap);
+  if (map.size > 0) throw new Error('Only an empty document can be filled.');
+  const places = firstPlaces(exchange.cells.length);
+  doc.transact(() => {
+    for (const [key, value] of Object.entries(exchange.settings)) doc.getMap(settingsMap).set(key, value);
+    exchange.cells.forEach(({ id, kind, source, settings }, index) =>
+      map.set(id, newCellEntry(kind, places[index] ?? '', source, settings)),
+    );
+  }, localOrigin);
 }

@@ -11,5 +11,6 @@ export {
   type ExchangeCalculation,
   type ExchangeHead,
 } from './exchange';
+export { measureDocument, type DocumentMeasure } from './measure';
 export type { DocumentCell } from './read-cell';
 export { cellKinds, documentLimits, type CellShape } from './shape';

@@ -1,5 +1,5 @@
 import { request as httpRequest } from 'node:http';
-import { pino } from 'pino';
+import { pino, stdSerializers } from 'pino';
 import type { Account, RegisterRow, RevisionDetail, Role } from '#contract';
 import { readConfig } from '../../src-server/config/index';
 import { insertPerson } from '../../src-server/repositories/people';
@@ -93,15 +93,17 @@ export interface TestServer {
 
 const parts: readonly Part[] = ['engineer', 'second', 'checker', 'lead', 'reader', 'administrator', 'stranger'];
 
+/** Silent, unless the environment asks for it: LOG_LEVEL=error npm test -- tests/server */
+const testLog = pino({ level: process.env.LOG_LEVEL ?? 'silent', serializers: { error: stdSerializers.err } });
+
 async function start(database: TestDatabase, port: number): Promise<RunningServer> {
   const config = readConfig({
     NODE_ENV: 'test',
     DATABASE_URL: database.url,
     SESSION_SECRET: 'only for tests, sixteen or more',
     PORT: String(port),
-    LOG_LEVEL: 'silent',
   });
-  return startServer(config, pino({ level: 'silent' }));
+  return startServer(config, testLog);
 }
 
 /** A server on a database of its own with a project and one person in each part. */
@@ -154,10 +156,11 @@ export async function startTestServer(): Promise<TestServer> {
 
 /** Opens a calculation from an example and answers its first revision. */
 export async function createCalculation(server: TestServer, example = 'charge-air-pipe'): Promise<RevisionDetail> {
-  const { body } = await server.client.engineer.post<RevisionDetail>(`/projects/${server.projectId}/calculations`, {
-    title: `Trial of ${example}`,
-    start: { from: 'example', example },
-  });
+  const { status, body } = await server.client.engineer.post<RevisionDetail>(
+    `/projects/${server.projectId}/calculations`,
+    { title: `Trial of ${example}`, start: { from: 'example', example } },
+  );
+  if (status !== 201) throw new Error(`The calculation was not opened: ${JSON.stringify(body)}`);
   return body;
 }
 

@@ -1,6 +1,14 @@
 import { findSubstance, type Outcome, type PropertyId, type State, type Substance } from '#engine';
 import { readCsv } from './csv';
-import { missingInputs, propertyRow, saturationProperties, stateInputsOf, type PropertyRow } from './property-row';
+import {
+  missingInputs,
+  propertyNames,
+  propertyRow,
+  saturatedAir,
+  saturationProperties,
+  stateInputsOf,
+  type PropertyRow,
+} from './property-row';
 import { agrees, Skips, type Summary } from './summary';
 
 /** A value, why there is none, or that the product does not carry what is asked. */
@@ -51,6 +59,14 @@ function enthalpyRise(row: PropertyRow, substance: Substance): Got {
   return 'value' in second ? { value: second.value - first.value } : second;
 }
 
+/** Saturated moist air; the saturation pressure alone needs no humidity, and no pressure. */
+function fromSaturatedAir(row: PropertyRow, substance: Substance): Got {
+  const inputs = stateInputsOf(row, substance);
+  if (row.property === 'p_ws') return fromState(substance.state({ ...inputs, W: 0 }), 'p_ws', substance);
+  if (row.property === 'W_sat') return fromState(substance.state({ ...inputs, W: 0 }), 'W_sat', substance);
+  return fromState(substance.state({ ...inputs, RH: 1 }), 'h_da', substance);
+}
+
 function valueOf(row: PropertyRow, substance: Substance): Got {
   const { property } = row;
   const inputs = stateInputsOf(row, substance);
@@ -59,6 +75,7 @@ function valueOf(row: PropertyRow, substance: Substance): Got {
     const outcome = substance.freezing(inputs.massFraction);
     return outcome.ok ? { value: outcome.value } : { failure: outcome.error.message };
   }
+  if (substance.id === 'moist_air' && saturatedAir.includes(property)) return fromSaturatedAir(row, substance);
   if (saturationProperties.includes(property) && inputs.x === undefined) return fromSaturation(row, substance);
   const alone = fromTransport(row, substance);
   if (alone !== undefined) return alone;
@@ -67,8 +84,11 @@ function valueOf(row: PropertyRow, substance: Substance): Got {
     const got = fromState(substance.state(inputs), 'cp', substance);
     return 'value' in got && molarMass !== undefined ? { value: got.value * molarMass } : got;
   }
-  return fromState(substance.state(inputs), property as PropertyId, substance);
+  return fromState(substance.state(inputs), propertyNames[property] ?? (property as PropertyId), substance);
 }
+
+/** Tables of check values write solids with a prefix: `solid:silver`, `refractory:Mullite`. */
+const substanceOf = (name: string): Substance | undefined => findSubstance(name.replace(/^(solid|refractory):/, ''));
 
 /** Compares fluid properties with a CSV of check values: substance, property, T_K, p_Pa, inputs (JSON), expected, rel_tol, id. */
 export function compareProperties(text: string): Summary {
@@ -76,7 +96,7 @@ export function compareProperties(text: string): Summary {
   const skips = new Skips();
   for (const [index, record] of readCsv(text).entries()) {
     const row = propertyRow.parse(record);
-    const substance = findSubstance(row.substance);
+    const substance = substanceOf(row.substance);
     if (substance === undefined) {
       skips.add(`${row.substance} is not carried`);
       continue;

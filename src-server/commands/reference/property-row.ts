@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { propertyDefinitions, type StateInputs, type Substance } from '#engine';
+import { propertyDefinitions, type PropertyId, type StateInputs, type Substance } from '#engine';
 
 const number = z.union([z.literal(''), z.coerce.number()]).transform((value) => (value === '' ? undefined : value));
 
@@ -31,11 +31,29 @@ const inputNames: Readonly<Record<string, keyof StateInputs>> = {
   rho_molar: 'rho',
   mass_fraction: 'massFraction',
   salinity_kg_kg: 'massFraction',
+  RH: 'RH',
+  W: 'W',
+  T_wb: 'T_wb',
+  T_dp: 'T_dp',
 };
 /** Keys that name a variant which is the product's own, or an input of a derived property. */
 const variantKeys: readonly string[] = ['phase', 'critical_enhancement', 'transport', 'h_ref', 'T1', 'T2'];
+/** Names of properties in the tables where the product has another. */
+export const propertyNames: Readonly<Record<string, PropertyId>> = {
+  h_per_kg_dry: 'h_da',
+  v_per_kg_dry: 'v_da',
+  rho_moist: 'rho',
+};
 /** Properties that a row may ask for beside those of a state. */
-const derived: readonly string[] = ['delta_h', 'cp_molar', 'T_freeze'];
+const derived: readonly string[] = [
+  'delta_h',
+  'cp_molar',
+  'T_freeze',
+  'h_sat_per_kg_dry',
+  ...Object.keys(propertyNames),
+];
+/** Of saturated moist air; their rows give T and p only. */
+export const saturatedAir: readonly string[] = ['W_sat', 'p_ws', 'h_sat_per_kg_dry'];
 export const saturationProperties: readonly string[] = ['p_sat', 'T_sat', 'h_fg', 'sigma'];
 
 export function stateInputsOf(row: PropertyRow, substance: Substance): StateInputs {
@@ -61,6 +79,7 @@ export function missingInputs(row: PropertyRow, substance: Substance): string | 
   const keys = Object.keys(row.inputs).filter((key) => !(key in inputNames) && !variantKeys.includes(key));
   if (keys.length > 0) return `input ${keys.join(', ')} of ${row.substance}`;
   const inputs = Object.keys(stateInputsOf(row, substance)).filter((key) => key !== 'phase');
+  if (substance.id === 'moist_air' && saturatedAir.includes(property)) return undefined;
   if (property === 'delta_h' || property === 'T_freeze') return undefined;
   if (saturationProperties.includes(property) && inputs.length === 1) return undefined;
   const takes = substance.inputs.some(

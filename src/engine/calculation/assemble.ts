@@ -1,79 +1,84 @@
 import { siUnitText } from '../units/index';
-import { sayingOf, sha256 } from './fingerprint';
-import type { CalculationNode, Outcome } from './node';
-import { present, twelveDigits } from './present';
-import { constants, type Symbol } from './symbols';
+import type { CompiledCell } from './compiled-cell';
+import { fingerprintOf } from './fingerprint';
+import type { Outcome } from './node';
+import { present, twelveDigits, twelveFigures } from './present';
+import type { Symbol } from './symbols';
 import { inlineNames } from './text-node';
-import type { CalculationSettings, CellInput, CellResult } from './types';
+import type { CalculationSettings, CellResult, NamedValue } from './types';
 
 /** What a cell's result is put together from. */
 export interface CellParts {
-  cell: CellInput;
-  nodes: readonly CalculationNode[];
-  /** Outcomes of the nodes, in their order. */
+  compiled: CompiledCell;
+  /** Outcomes of its nodes, in their order. */
   own: readonly Outcome[];
-  /** Names that the cell uses, and the outcomes of what defines them. */
-  uses: readonly string[];
-  definers: readonly (Outcome | undefined)[];
+  /** Symbol of a key in the sheet. */
+  symbol(key: string): Symbol | undefined;
+  /** Whether a key belongs to another cell: neither to this one nor to the built-in constants. */
+  isForeign(key: string): boolean;
 }
 
 function figureOf(symbol: Symbol | undefined): string {
   if (symbol?.value === undefined || symbol.type === undefined) return 'no value';
+  if (symbol.type.kind === 'condition') return symbol.value === 0 ? 'false' : 'true';
   const unit = siUnitText(symbol.type.dimension);
-  const figure = String(Number(symbol.value.toPrecision(12)));
+  const figure = twelveFigures(symbol.value);
   return unit === '1' ? figure : `${figure} ${unit}`;
 }
 
-/** Values that a cell uses, to 12 digits; of a fluid state or relation those that it names. */
-function dependenciesOf({ cell, nodes, uses, definers }: CellParts): Record<string, string> {
-  const defined = new Set(nodes.flatMap((node) => node.defines ?? []));
-  const entries = uses.flatMap((name, index): [string, string][] => {
-    const definer = definers[index];
-    if (defined.has(name) || (definer === undefined && constants.has(name))) return [];
-    const members = [...(definer?.symbols ?? [])].filter(([key]) => key.includes('.') && cell.source.includes(key));
-    if (members.length > 0) return members.map(([key, symbol]) => [key, figureOf(symbol)]);
-    return [[name, figureOf(definer?.symbols.get(name))]];
-  });
-  return Object.fromEntries(entries.sort(([a], [b]) => (a < b ? -1 : 1)));
+/** Values of other cells that a cell uses, to 12 digits; of a fluid state or relation those that it names. */
+function dependenciesOf({ compiled, symbol, isForeign }: CellParts): Record<string, string> {
+  const keys = compiled.keys.filter(isForeign).sort();
+  return Object.fromEntries(keys.map((key) => [key, figureOf(symbol(key))]));
 }
 
-function ownValues({ cell, nodes, own }: CellParts): string[] {
-  return own.flatMap((outcome, index) =>
-    outcome.line?.value === undefined
-      ? []
-      : [`${nodes[index]?.defines ?? cell.id}=${twelveDigits(outcome.line.value)}`],
-  );
+function ownValues(own: readonly Outcome[]): string[] {
+  return own.flatMap(({ line, relation }) => [
+    ...(line?.value === undefined ? [] : [`${line.name ?? line.line}=${twelveDigits(line.value)}`]),
+    ...(relation?.outputs.map(({ name, value }) => `${name}=${twelveDigits(value)}`) ?? []),
+  ]);
 }
 
-function inlineValues({ cell, uses, definers }: CellParts, settings: CalculationSettings): CellResult['inline'] {
+function inlineValues({ compiled: { cell }, symbol }: CellParts, settings: CalculationSettings): CellResult['inline'] {
   if (cell.kind !== 'text') return {};
-  const symbolOf = (key: string) =>
-    definers[uses.indexOf(key.split('.')[0] ?? key)]?.symbols.get(key) ?? constants.get(key);
-  return Object.fromEntries(
-    inlineNames(cell.source).flatMap((name) => {
-      const symbol = symbolOf(name);
-      if (symbol?.value === undefined || symbol.type === undefined) return [];
-      return [[name, symbol.display ?? present(symbol.value, symbol.type, settings)]];
-    }),
-  );
+  const inline: CellResult['inline'] = {};
+  for (const name of inlineNames(cell.source)) {
+    const found = symbol(name);
+    if (found?.value === undefined || found.type === undefined) continue;
+    inline[name] = found.display ?? present(found.value, found.type, settings);
+  }
+  return inline;
 }
 
 /** The result of a cell from those of its nodes and of what it uses. */
 export function assembleCell(parts: CellParts, settings: CalculationSettings): CellResult {
-  const { cell, nodes, own, uses } = parts;
+  const { compiled, own } = parts;
   const dependsOn = dependenciesOf(parts);
   return {
-    id: cell.id,
-    kind: cell.kind,
+    id: compiled.cell.id,
+    kind: compiled.cell.kind,
     lines: own.flatMap((outcome) => outcome.line ?? []),
     fluid: own.find((outcome) => outcome.fluid !== undefined)?.fluid,
     relation: own.find((outcome) => outcome.relation !== undefined)?.relation,
     inline: inlineValues(parts, settings),
-    diagnostics: own.flatMap((outcome) => outcome.diagnostics),
+    diagnostics: [
+      ...(compiled.refusal === undefined ? [] : [compiled.refusal]),
+      ...own.flatMap((outcome) => outcome.diagnostics),
+    ],
     outsideRange: [...new Set(own.flatMap((outcome) => outcome.outsideRange))],
-    defines: nodes.flatMap((node) => node.defines ?? []),
-    uses: [...uses],
-    fingerprint: sha256(JSON.stringify([sayingOf(cell), dependsOn, ownValues(parts)])),
+    defines: [...compiled.defines],
+    uses: [...compiled.uses],
+    fingerprint: fingerprintOf(compiled.saying, compiled.fromAmbient, settings, dependsOn, ownValues(own)),
     dependsOn,
   };
+}
+
+/** The names that a cell offers to others, with their values. */
+export function namesOf({ id, lines, fluid, relation }: CellResult): NamedValue[] {
+  const names: NamedValue[] = [];
+  for (const line of lines) if (line.name !== undefined) names.push({ name: line.name, cellId: id, value: line.value });
+  for (const row of fluid?.rows ?? [])
+    for (const { name, value } of row.values) names.push({ name, cellId: id, value });
+  for (const { name, value } of relation?.outputs ?? []) names.push({ name, cellId: id, value });
+  return names;
 }

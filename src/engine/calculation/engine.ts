@@ -1,37 +1,24 @@
-import type { Diagnostic } from '../errors/diagnostic';
-import { orderByDependence } from '../graph/order';
-import { assembleCell } from './assemble';
-import { nodesOf } from './cell-nodes';
-import type { CalculationNode, Outcome, Surroundings } from './node';
-import type { Symbol } from './symbols';
+import { circleThrough, orderByDependence } from '../graph/order';
+import { assembleCell, namesOf } from './assemble';
+import type { CompiledCell } from './compiled-cell';
+import { circleMember, faultyOutcome, firstDefinition, secondDefinition } from './definitions';
+import { baseOf, type CalculationNode, type Outcome, type Surroundings } from './node';
+import { same, sameItems } from './same';
+import { Sheet, type Touched } from './sheet';
+import { constants, type Symbol } from './symbols';
 import type {
   CalculationChange,
   CalculationDelta,
   CalculationInput,
   CalculationResult,
   CalculationSettings,
-  CellInput,
   CellResult,
   NamedValue,
 } from './types';
 
+export { limits } from './sheet';
+
 export const defaultSettings: CalculationSettings = { unitSystem: 'SI', significantDigits: 4, ambientPressure: 101325 };
-
-/** Limits that no sheet of the trade reaches, so that none can hang a client or the server. */
-export const limits = { cells: 5000, sourceLength: 100_000 } as const;
-
-interface Computed {
-  node: CalculationNode;
-  outcome: Outcome;
-  /** What the outcome rests on; computed anew only when one of them is another. */
-  rests: readonly unknown[];
-}
-
-/** The result of a cell, and everything that it was put together from. */
-interface Assembled {
-  result: CellResult;
-  rests: readonly unknown[];
-}
 
 /** A calculation that is kept, changed and computed anew only where something changed. */
 export interface Engine {
@@ -39,237 +26,221 @@ export interface Engine {
   result(): CalculationResult;
 }
 
+/** What one update computes, and why. */
+interface Round {
+  /** To be computed whatever they depend on. */
+  seeds: Set<CalculationNode>;
+  /** Nodes whose values are others than before, so that what depends on them is computed too. */
+  changed: Set<CalculationNode>;
+  /** Of names whose definition was put or taken away: what the name stood for before. */
+  former: Map<string, Outcome | undefined>;
+  circles: ReadonlyMap<CalculationNode, readonly CalculationNode[]>;
+  numbers(): ReadonlyMap<string, string>;
+}
+
 class KeptCalculation implements Engine {
   private settings = defaultSettings;
-  private readonly cells = new Map<string, CellInput>();
-  private readonly nodes = new Map<string, CalculationNode[]>();
-  private order: string[] = [];
-  private readonly computed = new Map<string, Computed>();
-  private results = new Map<string, Assembled>();
+  private readonly sheet = new Sheet();
+  private readonly outcomes = new Map<CalculationNode, Outcome>();
+  /** Nodes that looked through all names for a proposal. */
+  private readonly wondering = new Set<CalculationNode>();
+  /** Nodes in circles: when one is broken all its members have to be looked at. */
+  private readonly encircled = new Set<CalculationNode>();
+  private readonly results = new Map<string, { result: CellResult; names: NamedValue[] }>();
 
   update(change: CalculationChange): CalculationDelta {
-    if (change.settings !== undefined) {
-      this.settings = change.settings;
-      this.computed.clear();
+    const { graph } = this.sheet;
+    const former = this.formerDefinitions(change);
+    const touched = this.sheet.apply(change);
+    for (const node of touched.gone) {
+      this.outcomes.delete(node);
+      this.wondering.delete(node);
+      this.encircled.delete(node);
     }
-    for (const id of change.remove ?? []) this.drop(id);
-    for (const cell of change.put ?? []) this.put(cell);
-    if (change.order !== undefined) this.order = change.order.filter((id) => this.cells.has(id));
-    return this.compute(change.remove ?? []);
-  }
+    const redone = change.settings !== undefined && !same(change.settings, this.settings);
+    if (redone) this.settings = change.settings ?? this.settings;
 
-  private drop(id: string): void {
-    this.cells.delete(id);
-    for (const node of this.nodes.get(id) ?? []) this.computed.delete(node.key);
-    this.nodes.delete(id);
-    this.order = this.order.filter((other) => other !== id);
-  }
-
-  private put(cell: CellInput): void {
-    if (this.cells.size >= limits.cells && !this.cells.has(cell.id)) return;
-    const kept = { ...cell, source: cell.source.slice(0, limits.sourceLength) };
-    if (!this.cells.has(cell.id)) this.order.push(cell.id);
-    for (const node of this.nodes.get(cell.id) ?? []) this.computed.delete(node.key);
-    this.cells.set(cell.id, kept);
-    this.nodes.set(cell.id, nodesOf(kept));
-  }
-
-  /** First definition of each name in the order of the sheet, and where further ones stand. */
-  private definitions(all: readonly CalculationNode[]): {
-    first: Map<string, CalculationNode>;
-    doubled: Map<string, CalculationNode>;
-  } {
-    const first = new Map<string, CalculationNode>();
-    const doubled = new Map<string, CalculationNode>();
-    for (const node of all) {
-      if (node.defines === undefined || node.defines === '') continue;
-      const before = first.get(node.defines);
-      if (before === undefined) first.set(node.defines, node);
-      else doubled.set(node.key, before);
-    }
-    return { first, doubled };
-  }
-
-  private compute(removed: readonly string[]): CalculationDelta {
-    const all = this.order.flatMap((id) => this.nodes.get(id) ?? []);
-    const numbers = this.cellNumbers();
-    const byKey = new Map(all.map((node) => [node.key, node]));
-    const { first, doubled } = this.definitions(all);
-    const definersOf = (key: string) => (byKey.get(key)?.uses ?? []).flatMap((name) => first.get(name)?.key ?? []);
-    const { order, cycles } = orderByDependence([...byKey.keys()], definersOf);
-    const outcomes = new Map<string, Outcome>();
-    for (const cycle of cycles) for (const key of cycle) this.closeCircle(key, cycle, byKey, outcomes);
-    const names = [...first.keys()];
-    for (const key of order) {
-      const node = byKey.get(key);
-      if (node === undefined) continue;
-      const definers = node.uses.map((name) => first.get(name));
-      const rests = [
-        node,
-        doubled.get(key)?.cellId,
-        ...definers.map((definer) => (definer === undefined ? undefined : outcomes.get(definer.key))),
-      ];
-      outcomes.set(key, this.outcomeOf(node, rests, names, first, outcomes, doubled.get(key), numbers));
-    }
-    return this.collect(outcomes, first, removed);
-  }
-
-  private outcomeOf(
-    node: CalculationNode,
-    rests: readonly unknown[],
-    names: readonly string[],
-    first: ReadonlyMap<string, CalculationNode>,
-    outcomes: ReadonlyMap<string, Outcome>,
-    before: CalculationNode | undefined,
-    numbers: ReadonlyMap<string, string>,
-  ): Outcome {
-    const kept = this.computed.get(node.key);
-    if (kept !== undefined && sameItems(kept.rests, rests)) return kept.outcome;
-    const outcomeBehind = (name: string) => {
-      const definer = first.get(name);
-      return definer === undefined ? undefined : outcomes.get(definer.key);
+    const seeds = redone ? this.allNodes() : this.seedsOf(touched, former);
+    const affected = graph.affectedBy(seeds);
+    const dependencies = (node: CalculationNode) => graph.dependenciesOf(node).filter((each) => affected.has(each));
+    const { order, circles } = orderByDependence(affected, dependencies);
+    let numbers: ReadonlyMap<string, string> | undefined;
+    const round: Round = {
+      seeds,
+      changed: new Set(),
+      former,
+      circles,
+      numbers: () => (numbers ??= this.sheet.numbers()),
     };
-    const surroundings: Surroundings = {
+    const cells = redone ? new Set(this.sheet.order) : touched.cells;
+    for (const node of order) if (this.visit(node, round)) cells.add(node.cellId);
+    return this.collect(cells, change.remove ?? []);
+  }
+
+  private allNodes(): Set<CalculationNode> {
+    return new Set([...this.sheet.cells.values()].flatMap(({ nodes }) => nodes));
+  }
+
+  /** What the names of the cells that change stand for before they do. */
+  private formerDefinitions({ put = [], remove = [] }: CalculationChange): Map<string, Outcome | undefined> {
+    const former = new Map<string, Outcome | undefined>();
+    for (const id of [...put.map((cell) => cell.id), ...remove])
+      for (const name of this.sheet.cells.get(id)?.defines ?? []) former.set(name, this.definition(name));
+    for (const name of this.sheet.graph.namesDefinedSeveralTimes()) former.set(name, this.definition(name));
+    return former;
+  }
+
+  private definition(name: string): Outcome | undefined {
+    const definer = this.sheet.graph.definerOf(name);
+    return definer === undefined ? undefined : this.outcomes.get(definer);
+  }
+
+  private seedsOf(touched: Touched, former: Map<string, Outcome | undefined>): Set<CalculationNode> {
+    const { graph } = this.sheet;
+    const gone = new Set(touched.gone);
+    const seeds = new Set(touched.fresh.filter((node) => !gone.has(node)));
+    let namesChanged = false;
+    for (const { defines } of [...touched.fresh, ...touched.gone]) {
+      if (defines === undefined) continue;
+      const before = former.get(defines);
+      if (!former.has(defines)) former.set(defines, undefined);
+      for (const definer of graph.definersOf(defines)) seeds.add(definer);
+      if ((before === undefined) === (graph.definerOf(defines) === undefined)) continue;
+      // A name came or went: what uses it has to be looked at, whatever else it uses.
+      namesChanged = true;
+      for (const user of graph.usersOf(defines)) seeds.add(user);
+    }
+    if (touched.rearranged)
+      for (const name of graph.namesDefinedSeveralTimes())
+        for (const definer of graph.definersOf(name)) seeds.add(definer);
+    if (namesChanged) for (const node of this.wondering) seeds.add(node);
+    return seeds;
+  }
+
+  /** Computes a node if something that it rests on changed; answers whether it did. */
+  private visit(node: CalculationNode, round: Round): boolean {
+    const { graph } = this.sheet;
+    const inCircle = round.circles.has(node);
+    const due = inCircle || this.encircled.has(node) || round.seeds.has(node);
+    if (!due && !graph.dependenciesOf(node).some((each) => round.changed.has(each))) return false;
+    if (inCircle) this.encircled.add(node);
+    else this.encircled.delete(node);
+    const outcome = this.placed(node, this.computed(node, round), round);
+    const before = this.outcomeBefore(node, round);
+    if (before !== undefined && sameForOthers(before, outcome)) outcome.symbols = before.symbols;
+    else round.changed.add(node);
+    this.outcomes.set(node, outcome);
+    return true;
+  }
+
+  /** What those that use a node have seen of its name so far. */
+  private outcomeBefore(node: CalculationNode, { former }: Round): Outcome | undefined {
+    const name = node.defines;
+    const isRenewed = name !== undefined && former.has(name) && this.sheet.graph.definerOf(name) === node;
+    return isRenewed ? former.get(name) : this.outcomes.get(node);
+  }
+
+  private computed(node: CalculationNode, round: Round): Outcome {
+    this.wondering.delete(node);
+    try {
+      return node.compute(this.surroundings(node, round.circles.get(node)));
+    } catch (error) {
+      return faultyOutcome(node, error);
+    }
+  }
+
+  private symbol(key: string): Symbol | undefined {
+    const base = baseOf(key);
+    return this.definition(base)?.symbols.get(key) ?? constants.get(key);
+  }
+
+  private surroundings(node: CalculationNode, circle: readonly CalculationNode[] | undefined): Surroundings {
+    const { graph } = this.sheet;
+    // What stands in a circle with a node has no value for it.
+    const encircled = new Set(circle?.map(({ defines }) => defines));
+    return {
       settings: this.settings,
-      symbol: (key) => outcomeBehind(key.split('.')[0] ?? key)?.symbols.get(key),
-      isObject: (name) => first.get(name)?.key.match(/:(state|relation)$/) !== null && first.has(name),
-      namesInReach: () => [...names, ...names.flatMap((name) => [...(outcomeBehind(name)?.symbols.keys() ?? [])])],
-      outsideBehind: (name) => outcomeBehind(name)?.outsideRange ?? [],
+      symbol: (key) => (encircled.has(baseOf(key)) ? {} : this.symbol(key)),
+      names: () => {
+        this.wondering.add(node);
+        return graph.names();
+      },
+      keysOf: (name) => [...(this.definition(name)?.symbols.keys() ?? [])].filter((key) => key !== name),
+      outsideBehind: (name) => (encircled.has(name) ? [] : (this.definition(name)?.outsideRange ?? [])),
     };
-    const fresh = node.compute(surroundings);
-    const outcome = before === undefined ? fresh : secondDefinition(fresh, node, numbers.get(before.cellId) ?? '');
-    const settled = kept !== undefined && sameOutcome(kept.outcome, outcome) ? kept.outcome : outcome;
-    this.computed.set(node.key, { node, outcome: settled, rests });
-    return settled;
   }
 
-  private closeCircle(
-    key: string,
-    cycle: readonly string[],
-    byKey: ReadonlyMap<string, CalculationNode>,
-    outcomes: Map<string, Outcome>,
-  ): void {
-    const node = byKey.get(key);
-    if (node === undefined) return;
-    const members = cycle.map((member) => byKey.get(member)?.defines ?? member);
-    const message = `These define each other in a circle: ${[...members, members[0]].join(' → ')}.`;
-    const known = new Map<string, Symbol>(node.defines === undefined ? [] : [[node.defines, {}]]);
-    const fresh = node.compute({
-      settings: this.settings,
-      symbol: () => ({}),
-      isObject: () => true,
-      namesInReach: () => [],
-      outsideBehind: () => [],
-    });
-    const diagnostic: Diagnostic = {
-      code: 'CIRCLE',
-      severity: 'error',
-      message,
-      ...(fresh.line === undefined ? {} : { span: fresh.line.span }),
-    };
-    if (fresh.line !== undefined) fresh.line.diagnostics.push(diagnostic);
-    outcomes.set(key, {
-      ...fresh,
-      symbols: known,
-      diagnostics: fresh.line?.diagnostics ?? [...fresh.diagnostics, diagnostic],
-    });
-    this.computed.delete(key);
-  }
-
-  private cellNumbers(): Map<string, string> {
-    let section = 0;
-    let within = 0;
-    return new Map(
-      this.order.map((id) => {
-        if (this.cells.get(id)?.kind === 'section') {
-          section += 1;
-          within = 0;
-          return [id, String(section)];
-        }
-        within += 1;
-        return [id, `${section}.${within}`];
-      }),
-    );
-  }
-
-  /** Cells anew whose own outcomes, or those of what they use, are others than before. */
-  private collect(
-    outcomes: ReadonlyMap<string, Outcome>,
-    first: ReadonlyMap<string, CalculationNode>,
-    removed: readonly string[],
-  ): CalculationDelta {
-    const results = new Map<string, Assembled>();
-    const changed: CellResult[] = [];
-    for (const id of this.order) {
-      const cell = this.cells.get(id);
-      if (cell === undefined) continue;
-      const nodes = this.nodes.get(id) ?? [];
-      const own = nodes.flatMap((node) => outcomes.get(node.key) ?? []);
-      const uses = [...new Set(nodes.flatMap((node) => node.uses))];
-      const definers = uses.map((name) => outcomes.get(first.get(name)?.key ?? ''));
-      const rests = [cell, this.settings, ...own, ...definers];
-      const before = this.results.get(id);
-      if (before !== undefined && sameItems(before.rests, rests)) {
-        results.set(id, before);
-        continue;
-      }
-      const result = assembleCell({ cell, nodes, own, uses, definers }, this.settings);
-      results.set(id, { result, rests });
-      if (before === undefined || JSON.stringify(before.result) !== JSON.stringify(result)) changed.push(result);
+  /** The outcome as its place on the sheet makes it: in a circle, or beside other definitions of its name. */
+  private placed(node: CalculationNode, outcome: Outcome, round: Round): Outcome {
+    const { graph } = this.sheet;
+    const name = node.defines;
+    const circle = round.circles.get(node);
+    let result = outcome;
+    if (circle !== undefined) {
+      const members = new Set(circle);
+      const within = (each: CalculationNode) => graph.dependenciesOf(each).filter((other) => members.has(other));
+      result = circleMember(result, circleThrough(node, within) ?? [node]);
     }
-    this.results = results;
-    return { cells: changed, removed: [...removed], names: this.names() };
+    if (name === undefined || !graph.namesDefinedSeveralTimes().has(name)) return result;
+    const [first, second] = graph.definersOf(name);
+    if (first === undefined || second === undefined) return result;
+    return first === node
+      ? firstDefinition(result, name, this.placeOf(second, node, round))
+      : secondDefinition(result, name, this.placeOf(first, node, round));
+  }
+
+  /** Where a definition stands, seen from another: `3.2`, or its line in the same cell. */
+  private placeOf(node: CalculationNode, from: CalculationNode, round: Round): string {
+    if (node.cellId !== from.cellId) return round.numbers().get(node.cellId) ?? '';
+    return node.line === undefined ? 'the name of this cell' : `line ${node.line + 1}`;
+  }
+
+  private collect(ids: ReadonlySet<string>, removed: readonly string[]): CalculationDelta {
+    for (const id of removed) if (!this.sheet.cells.has(id)) this.results.delete(id);
+    const cells: CellResult[] = [];
+    for (const id of ids) {
+      const compiled = this.sheet.cells.get(id);
+      if (compiled === undefined) continue;
+      const result = this.assembled(compiled);
+      if (same(this.results.get(id)?.result, result)) continue;
+      this.results.set(id, { result, names: namesOf(result) });
+      cells.push(result);
+    }
+    return { cells, removed: [...removed], names: this.names() };
+  }
+
+  private assembled(compiled: CompiledCell): CellResult {
+    const parts = {
+      compiled,
+      own: compiled.nodes.flatMap((node) => this.outcomes.get(node) ?? []),
+      symbol: (key: string) => this.symbol(key),
+      isForeign: (key: string) => {
+        const definer = this.sheet.graph.definerOf(baseOf(key));
+        return definer === undefined ? !constants.has(key) : definer.cellId !== compiled.cell.id;
+      },
+    };
+    return assembleCell(parts, this.settings);
   }
 
   private names(): NamedValue[] {
-    return [...this.results.values()].flatMap(({ result }) => [
-      ...result.lines.flatMap((line) =>
-        line.name === undefined ? [] : [{ name: line.name, cellId: result.id, value: line.value }],
-      ),
-      ...(result.fluid?.rows.flatMap((row) =>
-        row.values.map(({ name, value }) => ({ name, cellId: result.id, value })),
-      ) ?? []),
-      ...(result.relation?.outputs.map(({ name, value }) => ({ name, cellId: result.id, value })) ?? []),
-    ]);
+    const all: NamedValue[] = [];
+    for (const id of this.sheet.order) for (const name of this.results.get(id)?.names ?? []) all.push(name);
+    return all;
   }
 
   result(): CalculationResult {
-    return {
-      cells: Object.fromEntries([...this.results].map(([id, { result }]) => [id, result])),
-      names: this.names(),
-    };
+    const cells: Record<string, CellResult> = {};
+    for (const id of this.sheet.order) {
+      const kept = this.results.get(id);
+      if (kept !== undefined) cells[id] = kept.result;
+    }
+    return { cells, names: this.names() };
   }
 }
 
-function sameItems(left: readonly unknown[], right: readonly unknown[]): boolean {
-  return left.length === right.length && left.every((item, index) => item === right[index]);
-}
-
-function secondDefinition(outcome: Outcome, node: CalculationNode, number: string): Outcome {
-  const diagnostic: Diagnostic = {
-    code: 'DEFINED_TWICE',
-    severity: 'error',
-    message: `${node.defines ?? ''} is defined already in ${number}; every name is defined once.`,
-    ...(outcome.line === undefined ? {} : { span: outcome.line.span }),
-  };
-  const line =
-    outcome.line === undefined
-      ? undefined
-      : { ...outcome.line, diagnostics: [...outcome.line.diagnostics, diagnostic], value: undefined };
-  return {
-    ...outcome,
-    symbols: new Map(),
-    diagnostics: [...outcome.diagnostics, diagnostic],
-    ...(line === undefined ? {} : { line }),
-  };
-}
-
-/** Same for all that depends on it and for the eye: then the old object stays, and nothing behind it is computed. */
-function sameOutcome(left: Outcome, right: Outcome): boolean {
-  return (
-    JSON.stringify([[...left.symbols], left.line, left.fluid, left.relation, left.diagnostics, left.outsideRange]) ===
-    JSON.stringify([[...right.symbols], right.line, right.fluid, right.relation, right.diagnostics, right.outsideRange])
-  );
+/** Whether nothing that depends on a node can tell its outcome from the one before. */
+function sameForOthers(left: Outcome, right: Outcome): boolean {
+  return same(left.symbols, right.symbols) && sameItems(left.outsideRange, right.outsideRange);
 }
 
 export function createEngine(): Engine {

@@ -1,45 +1,16 @@
-import type { Diagnostic } from '../errors/diagnostic';
+import { evaluationDiagnostic } from '../errors/evaluation-errors';
 import { expressionLatex, hiddenNameHints, literalOf, symbolLatex, type Line } from '../language/index';
-import { describe, type Inferred } from '../language/inference';
-import { plainUnit, quantityName, sameDimension, type ResolvedUnit } from '../units/index';
-import { dependenciesOf, evaluateExpression } from './expression';
-import type { CalculationNode, Outcome, Surroundings } from './node';
-import { isTemperatureLevel, present, valueLatex } from './present';
+import { describe } from '../language/inference';
+import { plainUnit } from '../units/index';
+import { evaluateExpression, impossibleLevel, keysOf } from './expression';
+import { outsideBehindAll, type CalculationNode, type Outcome, type Surroundings } from './node';
+import { present, valueLatex, type Wish } from './present';
 import type { Symbol } from './symbols';
+import { asNamed, tooLarge, withTarget } from './target';
 import type { LineResult } from './types';
 
-/** Names that speak of a temperature level: `T_a = 300 K` is one, `dT = 5 K` is not. */
-const namesALevel = /^(T|t|theta|Theta)(_|\d|$)/;
-
-function asNamed(type: Inferred, line: Line): Inferred {
-  if (type.levels !== 'soft' || line.name === undefined || !namesALevel.test(line.name)) return type;
-  const literal = line.expression === undefined ? undefined : literalOf(line.expression);
-  return literal?.literal.unit === undefined ? type : { ...type, levels: 1 };
-}
-
-function targetDiagnostic(type: Inferred, line: Line): Diagnostic | undefined {
-  const target = line.target;
-  if (target === undefined || sameDimension(target.unit.dimension, type.dimension)) return undefined;
-  return {
-    code: 'UNITS_DISAGREE',
-    severity: 'error',
-    message: `Asked in ${target.unit.display || '1'} (${quantityName(target.unit.dimension)}), comes out as ${describe(type)}.`,
-    span: target.span,
-  };
-}
-
-function belowAbsoluteZero(type: Inferred, value: number, line: Line): Diagnostic | undefined {
-  if (!isTemperatureLevel(type) || value >= 0) return undefined;
-  return {
-    code: 'BELOW_ABSOLUTE_ZERO',
-    severity: 'error',
-    message: `This temperature would be ${String(Number(value.toPrecision(4))).replace('-', '−')} K, below absolute zero.`,
-    span: line.expression?.span ?? line.span,
-  };
-}
-
 /** How a literal line is shown: as it was written. */
-function wishOf(line: Line): { target?: ResolvedUnit | undefined; figures?: string | undefined } {
+function wishOf(line: Line): Wish {
   const literal = line.expression === undefined ? undefined : literalOf(line.expression);
   if (line.target !== undefined) return { target: line.target.unit };
   if (literal === undefined) return {};
@@ -47,7 +18,10 @@ function wishOf(line: Line): { target?: ResolvedUnit | undefined; figures?: stri
   return { target: literal.literal.unit?.unit ?? plainUnit, figures };
 }
 
-function emptyResult(line: Line): LineResult {
+/** What a line shows before it is computed; the same whatever the sheet holds beside it. */
+function shownParts(
+  line: Line,
+): Pick<LineResult, 'line' | 'span' | 'kind' | 'name' | 'symbolLatex' | 'formulaLatex' | 'note'> {
   return {
     line: line.number,
     span: line.span,
@@ -56,49 +30,35 @@ function emptyResult(line: Line): LineResult {
     symbolLatex: line.name === undefined ? undefined : symbolLatex(line.name),
     formulaLatex: line.expression === undefined ? undefined : expressionLatex(line.expression),
     note: line.note,
-    waitsFor: [],
-    diagnostics: [...line.diagnostics],
-    outsideRange: [],
   };
 }
 
-function computeLine(line: Line, uses: readonly string[], surroundings: Surroundings): Outcome {
-  const result = emptyResult(line);
-  const symbol: Symbol = {};
-  const outcome = (): Outcome => ({
-    symbols: line.name === undefined ? new Map<string, Symbol>() : new Map([[line.name, symbol]]),
-    line: result,
-    diagnostics: result.diagnostics,
-    outsideRange: result.outsideRange,
-  });
+/** Computes into a result and the symbol of the line; stops where there is nothing more to say. */
+function computeInto(result: LineResult, symbol: Symbol, line: Line, surroundings: Surroundings): void {
   const unreadable = line.diagnostics.some((diagnostic) => diagnostic.severity === 'error');
-  if (line.expression === undefined || unreadable) return outcome();
-
+  if (line.expression === undefined || unreadable) return;
   const isName = (word: string) => surroundings.symbol(word) !== undefined;
   const evaluated = evaluateExpression(line.expression, surroundings);
   result.diagnostics.push(...evaluated.diagnostics, ...hiddenNameHints(line, isName));
   result.waitsFor = evaluated.waitsFor;
-  result.outsideRange = [...new Set(uses.flatMap((name) => surroundings.outsideBehind(name)))];
-  if (evaluated.type === undefined) return outcome();
-  const type = asNamed(evaluated.type, line);
-  if (line.kind === 'require' && type.kind !== 'condition') {
-    result.diagnostics.push({
-      code: 'KIND',
-      severity: 'error',
-      message: `require states a condition, such as dp <= 50 kPa; this is ${describe(type)}.`,
-      span: line.expression.span,
-    });
-    return outcome();
+  if (evaluated.type === undefined) return;
+  if (line.kind === 'require' && evaluated.type.kind !== 'condition') {
+    const given = describe(evaluated.type);
+    result.diagnostics.push(evaluationDiagnostic('REQUIRE_CONDITION', line.expression.span, { given }));
+    return;
   }
-  const wrongTarget = targetDiagnostic(type, line);
-  if (wrongTarget !== undefined) result.diagnostics.push(wrongTarget);
-  else symbol.type = type;
+  const asked = withTarget(asNamed(evaluated.type, line), line);
+  if (asked.diagnostic !== undefined) result.diagnostics.push(asked.diagnostic);
+  const { type } = asked;
+  if (type === undefined) return;
+  symbol.type = type;
   const { value } = evaluated;
-  if (value === undefined || wrongTarget !== undefined) return outcome();
-  const impossible = belowAbsoluteZero(type, value, line);
+  if (value === undefined) return;
+  const impossible =
+    impossibleLevel(type, value, line.expression.span) ?? tooLarge(value, line, surroundings.settings.ambientPressure);
   if (impossible !== undefined) {
     result.diagnostics.push(impossible);
-    return outcome();
+    return;
   }
   result.value = present(value, type, surroundings.settings, wishOf(line));
   result.substitutionLatex = evaluated.substitution;
@@ -106,11 +66,19 @@ function computeLine(line: Line, uses: readonly string[], surroundings: Surround
   symbol.value = value;
   symbol.shown = valueLatex(result.value);
   symbol.display = result.value;
-  return outcome();
 }
 
 /** A line of expressions as a unit of dependence. */
-export function lineNode(cellId: string, key: string, line: Line): CalculationNode {
-  const uses = line.expression === undefined ? [] : dependenciesOf(line.expression);
-  return { key, cellId, defines: line.name, uses, compute: (surroundings) => computeLine(line, uses, surroundings) };
+export function lineNode(cellId: string, index: number, line: Line): CalculationNode {
+  const { uses, keys } = keysOf([line.expression]);
+  const parts = shownParts(line);
+  const compute = (surroundings: Surroundings): Outcome => {
+    const outsideRange = outsideBehindAll(uses, surroundings);
+    const result: LineResult = { ...parts, waitsFor: [], diagnostics: [...line.diagnostics], outsideRange };
+    const symbol: Symbol = {};
+    computeInto(result, symbol, line, surroundings);
+    const symbols = line.name === undefined ? new Map<string, Symbol>() : new Map([[line.name, symbol]]);
+    return { symbols, line: result, diagnostics: result.diagnostics, outsideRange };
+  };
+  return { cellId, index, line: line.number, defines: line.name, uses, keys, compute };
 }

@@ -11,6 +11,11 @@ export interface Symbol {
   shown?: { latex: string; single: boolean } | undefined;
   /** The same for reading, as its own line shows it. */
   display?: DisplayedValue | undefined;
+  /**
+   * The name of a cell with several values: `known` when they are all listed beside it, so that
+   * any other is a mistake; `unknown` when it cannot be told what it would offer.
+   */
+  several?: 'known' | 'unknown' | undefined;
 }
 
 const constantRows: readonly [name: string, value: number, unit: string][] = [

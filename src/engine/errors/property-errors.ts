@@ -61,6 +61,10 @@ const table = {
     'warning',
     'The measurements behind {formulation} end at {limit}; at {given} the equation is used beyond them.',
   ],
+  WARN_BOILING_NOT_CARRIED: [
+    'warning',
+    'The vapour pressure of {name} is not carried: at {temperature} it is a liquid for certain above {certain} only; this is {pressure}.',
+  ],
   WARN_ESTIMATED_PROPERTY: ['warning', '{problem}.'],
 } as const satisfies Readonly<Record<string, readonly [Severity, string]>>;
 

@@ -1,3 +1,5 @@
+export { compile } from './compile';
+export { failureDiagnostic, type Failure, type Show } from './failure';
 export { evaluateNumbers } from './numbers';
-export { compile, type Plan } from './plan';
-export { run, wholePower, type Evaluated, type Failure } from './run';
+export type { Plan } from './plan';
+export { run, wholePower, type Evaluated } from './run';

@@ -1,11 +1,12 @@
 import type { Expression } from '../language/tree';
-import { compile, type Plan } from './plan';
+import { compile } from './compile';
+import type { Plan } from './plan';
 import { run, type Evaluated } from './run';
 
 const plans = new WeakMap<Expression, Plan>();
 
 /** Universal constants that formulas on plain numbers may use by name, in SI. */
-const constants: Readonly<Record<string, number>> = { pi: Math.PI };
+const constants: ReadonlyMap<string, number> = new Map([['pi', Math.PI]]);
 
 /**
  * Evaluates an expression on plain numbers, as relation formulas and their conditions are written.
@@ -19,9 +20,9 @@ export function evaluateNumbers(expression: Expression, values: ReadonlyMap<stri
   }
   const inputs = new Float64Array(plan.inputs.length);
   for (const [index, name] of plan.inputs.entries()) {
-    const value = values.get(name) ?? constants[name];
+    const value = values.get(name) ?? constants.get(name);
     if (value === undefined)
-      return { ok: false, failure: { code: 'NO_VALUE', message: `${name} is not given.`, span: expression.span } };
+      return { ok: false, failure: { kind: 'not given', node: expression, values: [], reason: name } };
     inputs[index] = value;
   }
   return run(plan, inputs);

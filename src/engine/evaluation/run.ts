@@ -1,22 +1,10 @@
-import type { Span } from '../errors/diagnostic';
+import { exponentOf } from './exponent';
+import type { Failure } from './failure';
 import { evaluatorOf } from './functions';
 import { Op } from './operations';
 import type { Plan } from './plan';
 
-/** Why a plan has no value for these inputs. */
-export interface Failure {
-  code: 'DIVISION_BY_ZERO' | 'NO_VALUE' | 'OVERFLOW';
-  message: string;
-  span: Span;
-}
-
 export type Evaluated = { ok: true; value: number } | { ok: false; failure: Failure };
-
-const shown = (value: number) => String(Number(value.toPrecision(6))).replace('-', '−');
-
-function fail(code: Failure['code'], message: string, span: Span | undefined): Evaluated {
-  return { ok: false, failure: { code, message, span: span ?? { from: 0, to: 0 } } };
-}
 
 /** x to a whole power by repeated squaring; a negative one is the reciprocal. */
 export function wholePower(base: number, exponent: number): number {
@@ -24,112 +12,102 @@ export function wholePower(base: number, exponent: number): number {
   let square = base;
   for (let rest = Math.abs(exponent); rest > 0; rest >>= 1) {
     if ((rest & 1) === 1) result *= square;
-    square *= square;
+    if (rest > 1) square *= square;
   }
   return exponent < 0 ? 1 / result : result;
 }
 
+/** One instruction that computes a number; what has no value answers NaN or an infinity. */
+export function computed(code: number, x: number, y: number, second: number): number {
+  switch (code) {
+    case Op.move:
+      return x;
+    case Op.add:
+      return x + y;
+    case Op.subtract:
+      return x - y;
+    case Op.multiply:
+      return x * y;
+    case Op.divide:
+      return x / y;
+    case Op.negate:
+      return -x;
+    case Op.reciprocal:
+      return 1 / x;
+    case Op.wholePower:
+      return wholePower(x, second);
+    case Op.power:
+      return Math.pow(x, y);
+    case Op.least:
+      return Math.min(x, y);
+    case Op.greatest:
+      return Math.max(x, y);
+    case Op.less:
+      return x < y ? 1 : 0;
+    case Op.lessOrEqual:
+      return x <= y ? 1 : 0;
+    case Op.greater:
+      return x > y ? 1 : 0;
+    case Op.greaterOrEqual:
+      return x >= y ? 1 : 0;
+    case Op.equal:
+      return x === y ? 1 : 0;
+    case Op.different:
+      return x !== y ? 1 : 0;
+    case Op.not:
+      return x === 0 ? 1 : 0;
+    case Op.call:
+      return evaluatorOf(second).evaluate(x, 0);
+    default:
+      return evaluatorOf(code - Op.callOfTwo).evaluate(x, y);
+  }
+}
+
+/** Why an instruction has no finite result. */
+function failureOf(plan: Plan, at: number, x: number, y: number): Failure {
+  const code = plan.op[at] ?? 0;
+  const second = plan.b[at] ?? 0;
+  const node = plan.nodes[at];
+  if (node === undefined) throw new Error(`The plan has no instruction ${at}.`);
+  const isPower = node.type === 'binary' && node.operator === '^';
+  const exponent = isPower ? (exponentOf(node.right) ?? y) : y;
+  // Roots and reciprocals that stand for a power speak of it, not of themselves.
+  if (isPower && x < 0) return { kind: 'negative power', node, values: [x, exponent] };
+  if (isPower && x === 0) return { kind: 'zero power', node, values: [x, exponent] };
+  if (code === Op.divide && y === 0) return { kind: 'division', node, values: [x, y] };
+  if (code === Op.call || code >= Op.callOfTwo) {
+    const two = code >= Op.callOfTwo;
+    const reason = evaluatorOf(two ? code - Op.callOfTwo : second).refuse?.(x, two ? y : 0);
+    const values = two ? [x, y] : [x];
+    if (reason !== undefined) return { kind: 'function', node, values, reason };
+    return { kind: 'overflow', node, values };
+  }
+  // Within a power that is multiplied out the registers hold neither base nor exponent.
+  if (isPower) return { kind: 'overflow', node, values: code === Op.power || code === Op.wholePower ? [x, exponent] : [] };
+  return { kind: 'overflow', node, values: node.type === 'binary' ? [x, y] : [x] };
+}
+
 /**
  * Runs a plan at one point. `inputs` are SI values in the order of `plan.inputs`; conditions are 1
- * and 0. Never answers NaN or Infinity: those are failures that name the values behind them.
+ * and 0. Never answers NaN or an infinity: those are failures that name the values behind them.
  */
 export function run(plan: Plan, inputs: ArrayLike<number>): Evaluated {
-  const { op, a, b, out, constants, spans } = plan;
+  if (plan.broken !== undefined) return { ok: false, failure: { kind: 'overflow', node: plan.broken, values: [] } };
+  const { op, a, b, out } = plan;
   const r = new Float64Array(plan.registers);
+  r.set(inputs);
+  r.set(plan.constants, plan.inputs.length);
   for (let at = 0; at < op.length; at += 1) {
     const code = op[at] ?? 0;
-    const first = a[at] ?? 0;
     const second = b[at] ?? 0;
-    const x = r[first] ?? 0;
-    const y = r[second] ?? 0;
-    let value: number;
-    switch (code) {
-      case Op.constant:
-        value = constants[first] ?? 0;
-        break;
-      case Op.input:
-        value = inputs[first] ?? 0;
-        break;
-      case Op.move:
-        value = x;
-        break;
-      case Op.add:
-        value = x + y;
-        break;
-      case Op.subtract:
-        value = x - y;
-        break;
-      case Op.multiply:
-        value = x * y;
-        break;
-      case Op.divide:
-        if (y === 0)
-          return fail(
-            'DIVISION_BY_ZERO',
-            `Division by zero: ${shown(x)} is divided by a value that is zero.`,
-            spans[at],
-          );
-        value = x / y;
-        break;
-      case Op.negate:
-        value = -x;
-        break;
-      case Op.wholePower:
-        if (x === 0 && second < 0)
-          return fail('DIVISION_BY_ZERO', `Zero to the power of ${second} divides by zero.`, spans[at]);
-        value = wholePower(x, second);
-        break;
-      case Op.power:
-        if (x < 0 && !Number.isInteger(y))
-          return fail('NO_VALUE', `A negative value (${shown(x)}) has no power of ${shown(y)}.`, spans[at]);
-        if (x === 0 && y < 0)
-          return fail('DIVISION_BY_ZERO', `Zero to the power of ${shown(y)} divides by zero.`, spans[at]);
-        value = Math.pow(x, y);
-        break;
-      case Op.least:
-        value = Math.min(x, y);
-        break;
-      case Op.greatest:
-        value = Math.max(x, y);
-        break;
-      case Op.less:
-        value = x < y ? 1 : 0;
-        break;
-      case Op.lessOrEqual:
-        value = x <= y ? 1 : 0;
-        break;
-      case Op.greater:
-        value = x > y ? 1 : 0;
-        break;
-      case Op.greaterOrEqual:
-        value = x >= y ? 1 : 0;
-        break;
-      case Op.equal:
-        value = x === y ? 1 : 0;
-        break;
-      case Op.different:
-        value = x !== y ? 1 : 0;
-        break;
-      case Op.not:
-        value = x === 0 ? 1 : 0;
-        break;
-      case Op.jump:
-        at = first - 1;
-        continue;
-      case Op.jumpUnless:
-        if (x === 0) at = second - 1;
-        continue;
-      default: {
-        const two = code >= Op.call2Base;
-        const evaluator = evaluatorOf(two ? code - Op.call2Base : second);
-        const refused = evaluator.refuse?.(x, two ? y : 0);
-        if (refused !== undefined)
-          return fail('NO_VALUE', `No result: ${refused} (${two ? `${shown(x)}, ${shown(y)}` : shown(x)}).`, spans[at]);
-        value = evaluator.evaluate(x, two ? y : 0);
-      }
+    const x = r[a[at] ?? 0] ?? 0;
+    if (code >= Op.when && code <= Op.end) {
+      if (code === Op.otherwise || (code === Op.when && x === 0)) at = second;
+      continue;
     }
-    if (!Number.isFinite(value))
-      return fail('OVERFLOW', `The result is too large to be computed (from ${shown(x)} and ${shown(y)}).`, spans[at]);
+    const y = r[second] ?? 0;
+    const value = computed(code, x, y, second);
+    if (!Number.isFinite(value)) return { ok: false, failure: failureOf(plan, at, x, y) };
     r[out[at] ?? 0] = value;
   }
   return { ok: true, value: r[plan.result] ?? 0 };

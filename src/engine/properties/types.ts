@@ -6,6 +6,11 @@ export type StateInputs = Partial<Record<'T' | 'p' | 'x' | 'h' | 's' | 'rho', nu
   phase?: 'liquid' | 'gas';
   /** Composition of a mixture as mass fraction of the solute (glycols, sea water). */
   massFraction?: number;
+  /** Moist air: relative humidity (0 to 1), kg of vapour per kg of dry air, wet bulb and dew point in K. */
+  RH?: number;
+  W?: number;
+  T_wb?: number;
+  T_dp?: number;
 };
 
 export type PropertyId =
@@ -29,7 +34,16 @@ export type PropertyId =
   | 'sigma'
   | 'T_sat'
   | 'p_sat'
-  | 'h_fg';
+  | 'h_fg'
+  | 'T_freeze'
+  | 'RH'
+  | 'W'
+  | 'W_sat'
+  | 'T_wb'
+  | 'T_dp'
+  | 'p_ws'
+  | 'h_da'
+  | 'v_da';
 
 export interface PropertyDefinition {
   id: PropertyId;
@@ -42,7 +56,7 @@ export interface PropertyDefinition {
 
 export interface State {
   substance: string;
-  phase: 'liquid' | 'vapour' | 'gas' | 'supercritical' | 'two-phase';
+  phase: 'liquid' | 'vapour' | 'gas' | 'supercritical' | 'two-phase' | 'solid';
   /** `IAPWS R7-97 region 1` */
   formulation: string;
   values: Partial<Record<PropertyId, number>>;
@@ -70,6 +84,8 @@ export interface Substance {
   id: string;
   /** `Water and steam` */
   name: string;
+  /** Where lists put it; fluids where absent. */
+  group?: 'fluid' | 'liquid' | 'solid';
   /** Other words under which it is found. */
   aliases: string[];
   /** Formulations with authors and year, one citation each. */

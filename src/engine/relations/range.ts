@@ -197,9 +197,9 @@ export function judgeValidity(
   evaluate: EvaluateNumbers,
 ): ValidityResult[] {
   const of: Case = { relation, values, evaluate };
-  return readRelation(relation).validity.map(({ text, expression }) => ({
+  return readRelation(relation).validity.map(({ text, latex, expression }) => ({
     condition: text,
-    conditionLatex: expressionLatex(expression),
+    conditionLatex: latex,
     missing: missingIn(expression, of),
     ...judge(text, expression, of),
   }));

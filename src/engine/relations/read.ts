@@ -1,4 +1,4 @@
-import { readExpressionText, readLines, type Expression } from '../language/index';
+import { expressionLatex, readExpressionText, readLines, type Expression } from '../language/index';
 import type { Relation } from './types';
 
 /** A formula line, read: an assignment, or an unknown to be found between two ends. */
@@ -8,6 +8,7 @@ export type ReadFormulaLine =
 
 export interface ReadCondition {
   text: string;
+  latex: string;
   expression: Expression;
 }
 
@@ -53,7 +54,10 @@ export function readRelation(relation: Relation): ReadRelation {
     }
     return { kind: 'assignment', symbol: assignment.name, expression: assignment.expression };
   });
-  const validity = relation.validity.map((text) => ({ text, expression: read(text, relation) }));
+  const validity = relation.validity.map((text): ReadCondition => {
+    const expression = read(text, relation);
+    return { text, latex: expressionLatex(expression), expression };
+  });
   const bands = (relation.accuracyBands ?? []).map(({ when, relativeAccuracy }) => ({
     when: read(when, relation),
     relativeAccuracy,

@@ -1,2 +1,5 @@
-export { describe, Inference, nearest } from './infer';
-export type { Inferred, LevelCount, Lookup } from './types';
+export { describe, isPressure, isTemperature, levelWords } from './describe';
+export { Inference } from './infer';
+export { unknownName } from './names';
+export { nearest } from './nearest';
+export type { Inferred, LevelCount, Lookup, Reach } from './types';

@@ -1,7 +1,7 @@
 import type { LevelCount } from './types';
 
 export function addLevels(left: LevelCount, right: LevelCount, sign: 1 | -1): LevelCount {
-  if (typeof left === 'number' && typeof right === 'number') return left + sign * right;
+  if (typeof left === 'number' && typeof right === 'number') return rounded(left + sign * right);
   if (left === 'any' || right === 'any') return 'any';
   if (left === 'soft' && right === 'soft') return 'soft';
   if (right === 'soft') return left;
@@ -9,10 +9,15 @@ export function addLevels(left: LevelCount, right: LevelCount, sign: 1 | -1): Le
   return sign === 1 ? right : 'any';
 }
 
+/** A count times a figure; one that is no number (division by zero) leaves no count to speak of. */
 export function scaleLevels(levels: LevelCount, factor: number): LevelCount {
-  if (typeof levels !== 'number') return levels;
-  const scaled = levels * factor;
-  return Math.abs(scaled - Math.round(scaled)) < 1e-9 ? Math.round(scaled) : scaled;
+  if (typeof levels !== 'number' || levels === 0) return levels;
+  return Number.isFinite(factor) ? rounded(levels * factor) : 'any';
+}
+
+/** Weights such as 0.3 and 0.7 sum to one but for rounding. */
+function rounded(levels: number): number {
+  return Math.abs(levels - Math.round(levels)) < 1e-9 ? Math.round(levels) + 0 : levels;
 }
 
 /** A difference or one level: anything else has no meaning. */

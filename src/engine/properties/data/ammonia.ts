@@ -1,3 +1,4 @@
+// Coefficients of the papers named in `sources`, read from the fluid data of CoolProp (MIT licence).
 import type { HelmholtzFluid } from '../helmholtz/types';
 import { ammoniaConductivity } from '../helmholtz/transport/ammonia';
 import { denseViscosity } from '../helmholtz/viscosity';
@@ -8,9 +9,9 @@ export const ammonia: HelmholtzFluid = {
   name: 'Ammonia',
   word: 'ammonia',
   aliases: ['ammonia', 'R717'],
-  formulation: 'Gao et al. 2020',
+  formulation: 'Gao et al. 2023',
   sources: [
-    'Gao, Wu, Bell, Harvey, Lemmon, A Reference Equation of State with an Associating Term for the Thermodynamic Properties of Ammonia, J. Phys. Chem. Ref. Data 49 (2020) 013102 (published 2023 as 52, 013102)',
+    'Gao, Wu, Bell, Harvey, Lemmon, A Reference Equation of State with an Associating Term for the Thermodynamic Properties of Ammonia, J. Phys. Chem. Ref. Data 52 (2023) 013102',
     'Fenghour, Wakeham, Vesovic, Watson, Millat, Vogel, The Viscosity of Ammonia, J. Phys. Chem. Ref. Data 24 (1995) 1649',
     'Tufeu, Ivanov, Garrabos, Le Neindre, Thermal Conductivity of Ammonia in a Large Temperature and Pressure Range Including the Critical Region, Ber. Bunsenges. Phys. Chem. 88 (1984) 422',
     'Mulero, Cachadiña, Parra, Recommended Correlations for the Surface Tension of Common Fluids, J. Phys. Chem. Ref. Data 41 (2012) 043105',
@@ -87,6 +88,7 @@ export const ammonia: HelmholtzFluid = {
     vapour: {
       T: 405.56,
       value: 13696,
+      unscaled: true,
       terms: [
         [-0.053296, 0.14],
         [-3.4589, 0.44],

@@ -1,3 +1,4 @@
+// Coefficients of the papers named in `sources`, read from the fluid data of CoolProp (MIT licence).
 import type { HelmholtzFluid } from '../helmholtz/types';
 import { heliumConductivity, heliumViscosity } from '../helmholtz/transport/helium';
 
@@ -7,16 +8,17 @@ export const helium: HelmholtzFluid = {
   name: 'Helium',
   word: 'helium',
   aliases: ['helium', 'helium-4', 'R704'],
-  formulation: 'Ortiz-Vega et al. 2023',
+  formulation: 'Ortiz Vega et al. 2023',
   sources: [
-    'Ortiz-Vega, Hall, Holste, Arp, Harvey, Lemmon, Helmholtz energy equation of state of helium-4 (numbers of 2019; published in J. Phys. Chem. Ref. Data 52 (2023) 043102)',
+    'Ortiz Vega, Hall, Holste, Harvey, Lemmon, An Equation of State for the Thermodynamic Properties of Helium, NISTIR 8474 (2023)',
     'Arp, McCarty, Friend, Thermophysical Properties of Helium-4 from 0.8 to 1500 K with Pressures to 2000 MPa, NIST Technical Note 1334 (1998)',
     'Hands, Arp, A correlation of thermal conductivity data for helium, Cryogenics 21 (1981) 697',
     'Mulero, Cachadiña, Parra, Recommended Correlations for the Surface Tension of Common Fluids, J. Phys. Chem. Ref. Data 41 (2012) 043105',
   ],
-  range: '−271 to 1727 °C up to 10 000 bar; viscosity and conductivity to 1227 °C',
+  range: '−271 to 1727 °C up to 20 000 bar; equation of state, viscosity and conductivity fitted to 1227 °C',
   temperature: [2.1768, 2000],
-  pressure: [1, 1000000000],
+  pressure: [1, 2000000000],
+  fitted: [2.1768, 1500],
   gasConstant: 8.3144598,
   molarMass: 0.004002602,
   reducing: { T: 5.1953, rho: 17383.7, p: 228322.78679097944 },

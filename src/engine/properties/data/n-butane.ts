@@ -1,3 +1,4 @@
+// Coefficients of the papers named in `sources`, read from the fluid data of CoolProp (MIT licence).
 import type { HelmholtzFluid } from '../helmholtz/types';
 import { olchowySengers, polynomialConductivity } from '../helmholtz/conductivity';
 import { denseViscosity, vogelInitialDensity } from '../helmholtz/viscosity';

@@ -1,3 +1,4 @@
+// Coefficients of the papers named in `sources`, read from the fluid data of CoolProp (MIT licence).
 import type { HelmholtzFluid } from '../helmholtz/types';
 import { lemmonJacobsenConductivity } from '../helmholtz/conductivity';
 import { denseViscosity, type DiluteGas } from '../helmholtz/viscosity';

@@ -1,3 +1,4 @@
+// Coefficients of the papers named in `sources`, read from the fluid data of CoolProp (MIT licence).
 import type { HelmholtzFluid } from '../helmholtz/types';
 
 /** R1234yf (2,3,3,3-tetrafluoropropene), without transport equations. */
@@ -77,6 +78,7 @@ export const r1234yf: HelmholtzFluid = {
     vapour: {
       T: 367.85,
       value: 4180,
+      unscaled: true,
       terms: [
         [-3.616, 0.426],
         [-74.91, 2],

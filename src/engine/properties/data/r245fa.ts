@@ -1,3 +1,4 @@
+// Coefficients of the papers named in `sources`, read from the fluid data of CoolProp (MIT licence).
 import type { HelmholtzFluid } from '../helmholtz/types';
 
 /** R245fa (1,1,1,3,3-pentafluoropropane), without transport equations. */

@@ -38,7 +38,7 @@ export function criticalEnhancement(
   const { xi0, cutoff, gamma0, R0, nu, gamma, referenceT, boltzmann } = constants;
   if (molarDensity === 0) return 0;
   const scale = (fluid.reducing.p * molarDensity) / fluid.reducing.rho ** 2;
-  const reference = equationOf(fluid).state(referenceT, molarDensity).compressibility;
+  const reference = equationOf(fluid).referenceCompressibility(referenceT, molarDensity);
   const excess = (scale * (state.compressibility - (reference * referenceT) / T)) / gamma0;
   // At a tiny excess the crossover would be the difference of two equal numbers.
   if (!(excess > 1e-12)) return 0;

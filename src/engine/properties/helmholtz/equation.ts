@@ -29,10 +29,13 @@ export class Equation {
   slope = 0;
   private readonly residual: Residual;
   private readonly ideal: Ideal;
+  /** For a second temperature that stays the same, so that its factors in τ are kept. */
+  private readonly reference: Residual;
 
   constructor(readonly fluid: HelmholtzFluid) {
     this.residual = new Residual(fluid.residual);
     this.ideal = new Ideal(fluid.ideal);
+    this.reference = new Residual(fluid.residual);
   }
 
   /** Pressure in Pa; leaves ∂p/∂ρ in `slope`. */
@@ -50,6 +53,14 @@ export class Equation {
     const { reducing } = this.fluid;
     this.residual.evaluate(molarDensity / reducing.rho, reducing.T / T);
     return this.residual;
+  }
+
+  /** ∂ρ/∂p at a reference temperature, mol/(m³·Pa). */
+  referenceCompressibility(T: number, molarDensity: number): number {
+    const { reducing, gasConstant } = this.fluid;
+    const { reference } = this;
+    reference.evaluate(molarDensity / reducing.rho, reducing.T / T);
+    return 1 / (gasConstant * T * (1 + 2 * reference.ad + reference.add));
   }
 
   state(T: number, molarDensity: number): HelmholtzState {

@@ -9,8 +9,8 @@ const sum = (terms: Ancillary['terms'], theta: number): number => {
 };
 
 /** value·exp(T₀/T·Σ n·θ^t) */
-export const exponentialAncillary = ({ T: T0, value, terms }: Ancillary, T: number): number =>
-  value * Math.exp((T0 / T) * sum(terms, Math.max(0, 1 - T / T0)));
+export const exponentialAncillary = ({ T: T0, value, unscaled, terms }: Ancillary, T: number): number =>
+  value * Math.exp((unscaled === true ? 1 : T0 / T) * sum(terms, Math.max(0, 1 - T / T0)));
 
 /** value·(1 + Σ n·θ^t) */
 export const linearAncillary = ({ T: T0, value, terms }: Ancillary, T: number): number =>
@@ -29,20 +29,21 @@ export interface SaturationPoint {
 const mostIterations = 100;
 const tolerance = 1e-13;
 
+/** Reduced densities of both phases. */
+interface Pair {
+  liquid: number;
+  vapour: number;
+}
+
 /**
  * Both densities at which pressure and Gibbs energy of the phases agree, by Newton's method on
  * J = δ(1 + δ·α_δ) and K = δ·α_δ + α + ln δ. Akasaka, R. (2008): A reliable and useful method to
  * determine the saturation state from Helmholtz energy equations of state. J. Thermal Sci. Technol.
- * 3, 442. Undefined very close to the critical point.
+ * 3, 442. Undefined where it does not converge from the start given.
  */
-export function saturationAtTemperature(
-  equation: Equation,
-  ancillaries: SaturationAncillaries,
-  T: number,
-): SaturationPoint | undefined {
-  const { reducing, gasConstant } = equation.fluid;
-  let liquid = linearAncillary(ancillaries.liquid, T) / reducing.rho;
-  let vapour = exponentialAncillary(ancillaries.vapour, T) / reducing.rho;
+function equilibrium(equation: Equation, T: number, start: Pair): Pair | undefined {
+  const { reducing } = equation.fluid;
+  let { liquid, vapour } = start;
   let damping = 1;
   let before = Infinity;
   for (let iteration = 0; iteration < mostIterations; iteration += 1) {
@@ -66,19 +67,48 @@ export function saturationAtTemperature(
     const factor = Math.min(damping, 0.3 / size);
     liquid += factor * stepLiquid;
     vapour += factor * stepVapour;
-    if (size < tolerance || (iteration > 8 && size < 1e-11)) {
-      if (!(liquid > vapour * (1 + 1e-7))) return undefined;
-      const p = vapour * reducing.rho * gasConstant * T * (1 + equation.residualAt(T, vapour * reducing.rho).ad);
-      return {
-        T,
-        p,
-        liquid: liquid * reducing.rho,
-        vapour: vapour * reducing.rho,
-        slope: clapeyron(equation, T, liquid, vapour),
-      };
-    }
+    // Close to the critical point rounding keeps the steps from vanishing.
+    if (size < tolerance || (iteration > 8 && size < 1e-11) || (iteration > 20 && size < 1e-8))
+      return liquid > vapour * (1 + 1e-7) ? { liquid, vapour } : undefined;
   }
   return undefined;
+}
+
+/** Closer to the critical point than this the ancillary densities may be no start; θ = 1 − T/T_c. */
+const criticalReach = 5e-3;
+
+/**
+ * The pair at T; close to the critical point from the pair at twice the distance, whose difference
+ * shrinks about as θ^0.4 while the mean stays.
+ */
+function pairAt(equation: Equation, ancillaries: SaturationAncillaries, T: number, depth = 0): Pair | undefined {
+  const { reducing, critical } = equation.fluid;
+  const found = equilibrium(equation, T, {
+    liquid: linearAncillary(ancillaries.liquid, T) / reducing.rho,
+    vapour: exponentialAncillary(ancillaries.vapour, T) / reducing.rho,
+  });
+  if (found !== undefined || depth > 30 || 1 - T / critical.T > criticalReach) return found;
+  const farther = pairAt(equation, ancillaries, critical.T - 2 * (critical.T - T), depth + 1);
+  if (farther === undefined) return undefined;
+  const mean = (farther.liquid + farther.vapour) / 2;
+  const half = ((farther.liquid - farther.vapour) / 2) * 0.5 ** 0.4;
+  return equilibrium(equation, T, { liquid: mean + half, vapour: mean - half });
+}
+
+/** The saturation of a pure fluid at a temperature; undefined very close to the critical point. */
+export function saturationAtTemperature(
+  equation: Equation,
+  ancillaries: SaturationAncillaries,
+  T: number,
+): SaturationPoint | undefined {
+  const pair = pairAt(equation, ancillaries, T);
+  if (pair === undefined) return undefined;
+  const { reducing, gasConstant } = equation.fluid;
+  const vapour = pair.vapour * reducing.rho;
+  // The vapour's pressure: that of a cold liquid is a small difference of large numbers.
+  const p = vapour * gasConstant * T * (1 + equation.residualAt(T, vapour).ad);
+  const liquid = pair.liquid * reducing.rho;
+  return { T, p, liquid, vapour, slope: clapeyron(equation, T, pair.liquid, pair.vapour) };
 }
 
 /** dp/dT = Δs/Δv, with molar quantities and reduced densities. */
@@ -101,7 +131,8 @@ export function saturationAtPressure(
     fluid.temperature[0] * 0.98,
     fluid.critical.T,
   );
-  let T = guess.converged ? guess.root : fluid.critical.T * 0.9999;
+  const end = p < ancillaries.pressure.value / 2 ? fluid.temperature[0] : fluid.critical.T * 0.9999;
+  let T = guess.converged ? guess.root : end;
   for (let iteration = 0; iteration < 30; iteration += 1) {
     const point = saturationAtTemperature(equation, ancillaries, T);
     if (point === undefined) return undefined;

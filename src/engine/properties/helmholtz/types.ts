@@ -53,6 +53,8 @@ export interface ResidualPart {
 export interface Ancillary {
   T: number;
   value: number;
+  /** In an exponential the sum is multiplied by T₀/T, unless this is set. */
+  unscaled?: true;
   terms: readonly (readonly [n: number, t: number])[];
 }
 

@@ -1,10 +1,41 @@
 import { bars, celsius, plain } from '../../errors/property-errors';
-import { findRoot } from '../../numerics/roots';
 import type { Outcome, State } from '../types';
 import { failed, refused } from './failure';
 import type { Phase, PhaseState, PureFluidModel } from './model';
 import { outside } from './single-phase';
 import { byQuality, saturatedStates } from './two-phase';
+
+const mostIterations = 100;
+
+/**
+ * The temperature between two ends at which h or s reaches a value, by Newton's method with the slope
+ * that the state itself knows (cp, or cp/T), halving the bracket where a step would leave it.
+ */
+function temperatureWith<P extends PhaseState>(
+  at: (T: number) => P | undefined,
+  property: 'h' | 's',
+  value: number,
+  from: number,
+  to: number,
+): number | undefined {
+  let [low, high] = [from, to];
+  const [first, last] = [at(low), at(high)];
+  if (first === undefined || last === undefined || first[property] > value || last[property] < value) return undefined;
+  let T = low + ((high - low) * (value - first[property])) / (last[property] - first[property]);
+  for (let iteration = 0; iteration < mostIterations; iteration += 1) {
+    const state = at(T);
+    if (state === undefined) return undefined;
+    const misfit = state[property] - value;
+    if (misfit > 0) high = T;
+    else low = T;
+    let next = T - misfit / (property === 'h' ? state.cp : state.cp / T);
+    if (!(next > low) || !(next < high)) next = 0.5 * (low + high);
+    const step = Math.abs(next - T);
+    T = next;
+    if (step <= 1e-13 * T) return T;
+  }
+  return undefined;
+}
 
 /** By p and h, or p and s: the phase at p is found first, then the temperature with which the equation gives the value. */
 export function byPressureAnd<P extends PhaseState>(
@@ -28,16 +59,9 @@ export function byPressureAnd<P extends PhaseState>(
     else low = T;
   }
   const phaseAt = (T: number): Phase => (side !== undefined && T < model.critical.T ? side : model.phaseOf(T, p));
-  const found = findRoot(
-    (T) => {
-      const state = model.at(T, p, phaseAt(T));
-      return state === undefined ? undefined : state[property] - value;
-    },
-    low,
-    high,
-  );
-  const phase = phaseAt(found.root);
-  const state = found.converged ? model.at(found.root, p, phase) : undefined;
+  const T = temperatureWith((at) => model.at(at, p, phaseAt(at)), property, value, low, high);
+  const phase = T === undefined ? undefined : phaseAt(T);
+  const state = T === undefined || phase === undefined ? undefined : model.at(T, p, phase);
   if (state === undefined)
     return refused('OUT_OF_RANGE_STATE', {
       problem: `No temperature from ${celsius(low)} to ${celsius(high)} gives ${
@@ -48,7 +72,7 @@ export function byPressureAnd<P extends PhaseState>(
       p,
       [property]: value,
     });
-  return { ok: true, value: model.complete(state, phase, false) };
+  return { ok: true, value: model.complete(state, phase ?? model.phaseOf(state.T, p), false) };
 }
 
 /** By T and density, through the two-phase region where the density lies between those of the phases. */

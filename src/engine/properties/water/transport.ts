@@ -25,6 +25,19 @@ const viscosityTerms: readonly (readonly [number, number, number])[] = [
   [5, 6, -0.000593264],
 ];
 
+const viscosityI = Int32Array.from(viscosityTerms, ([i]) => i);
+const viscosityJ = Int32Array.from(viscosityTerms, ([, j]) => j);
+const viscosityH = Float64Array.from(viscosityTerms, ([, , h]) => h);
+const xPowers = new Float64Array(6);
+const yPowers = new Float64Array(7);
+
+function powers(table: Float64Array, base: number): void {
+  table[0] = 1;
+  for (let power = 1; power < table.length; power += 1) table[power] = (table[power - 1] ?? 0) * base;
+}
+
+const viscosityDilute = [1.67752, 2.20462, 0.6366564, -0.241605];
+
 function polynomial(coefficients: readonly number[], x: number): number {
   let sum = 0;
   for (let index = coefficients.length - 1; index >= 0; index -= 1) sum = sum * x + (coefficients[index] ?? 0);
@@ -38,11 +51,14 @@ function polynomial(coefficients: readonly number[], x: number): number {
 export function viscosity(T: number, rho: number): number {
   const t = T / criticalTemperature;
   const delta = rho / criticalDensity;
-  const dilute = (100 * Math.sqrt(t)) / polynomial([1.67752, 2.20462, 0.6366564, -0.241605], 1 / t);
+  const dilute = (100 * Math.sqrt(t)) / polynomial(viscosityDilute, 1 / t);
   const x = 1 / t - 1;
   const y = delta - 1;
+  powers(xPowers, x);
+  powers(yPowers, y);
   let sum = 0;
-  for (const [i, j, h] of viscosityTerms) sum += h * x ** i * y ** j;
+  for (let at = 0; at < viscosityH.length; at += 1)
+    sum += (viscosityH[at] ?? 0) * (xPowers[viscosityI[at] ?? 0] ?? 0) * (yPowers[viscosityJ[at] ?? 0] ?? 0);
   return dilute * Math.exp(delta * sum) * 1e-6;
 }
 
@@ -106,7 +122,8 @@ export function backgroundConductivity(T: number, rho: number): number {
   const dilute = Math.sqrt(t) / polynomial(diluteConductivity, 1 / t);
   const x = 1 / t - 1;
   let sum = 0;
-  for (const [i, row] of conductivityTerms.entries()) sum += x ** i * polynomial(row, delta - 1);
+  for (let i = conductivityTerms.length - 1; i >= 0; i -= 1)
+    sum = sum * x + polynomial(conductivityTerms[i] ?? [], delta - 1);
   return dilute * Math.exp(delta * sum) * 1e-3;
 }
 

@@ -26,7 +26,11 @@ function enhancement({ T, rho }: HelmholtzState): number {
   const length = 1.34e-10 * t ** -0.63 * (1 + root);
   const susceptibility = 0.423e-8 * t ** -1.24 * (1 + root / 0.7);
   const isochore =
-    ((1.2 * boltzmann * T * T) / (6 * Math.PI * viscosity * length)) * slope * slope * susceptibility * Math.exp(-36 * t * t);
+    ((1.2 * boltzmann * T * T) / (6 * Math.PI * viscosity * length)) *
+    slope *
+    slope *
+    susceptibility *
+    Math.exp(-36 * t * t);
   const width = (0.61 * criticalRho + 16.5 * Math.log(t)) ** 2;
   const edge = 0.6 * criticalRho;
   const distance = Math.max(rho, edge) - 0.96 * criticalRho;

@@ -73,8 +73,7 @@ export const heliumConductivity: ConductivityEquation = {
     const linear = 1.86297053e-4 - 7.275964435e-7 * T - 1.427549651e-4 * t + 3.290833592e-5 * t * t;
     const cubic = -5.213335363e-8 + 4.492659933e-8 * t - 5.924416513e-9 * t * t;
     const logarithmic = 7.087321137e-6 - 6.013335678e-6 * t + 8.067145814e-7 * t * t + 3.995125013e-7 / T;
-    const excess =
-      linear * rho + cubic * rho ** 3 + (rho === 0 ? 0 : logarithmic * rho * rho * Math.log(rho / 68));
+    const excess = linear * rho + cubic * rho ** 3 + (rho === 0 ? 0 : logarithmic * rho * rho * Math.log(rho / 68));
     return dilute + excess + enhancement(state, mu);
   },
   temperature: [2.1768, 1500],

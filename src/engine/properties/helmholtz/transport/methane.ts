@@ -73,9 +73,7 @@ function susceptibility(state: HelmholtzState, fluid: HelmholtzFluid, dT: number
   const distance = Math.abs(dRho);
   if (Math.abs(dT) >= 0.03 || distance >= 0.03) {
     const delta = state.molarDensity / fluid.reducing.rho;
-    return (
-      0.28631 * delta * (fluid.reducing.T / state.T) * fluid.gasConstant * state.T * state.compressibility
-    );
+    return 0.28631 * delta * (fluid.reducing.T / state.T) * fluid.gasConstant * state.T * state.compressibility;
   }
   if (distance < 1e-16) return 0.0801 * Math.abs(dT) ** -1.19;
   const scaled = dT * distance ** (-1 / 0.355);
@@ -107,7 +105,10 @@ export const methaneConductivity: ConductivityEquation = {
 };
 
 /** Saturated vapour's reduced density below the critical temperature and density, otherwise one. */
-function residualDensity({ T, molarDensity }: HelmholtzState, { saturation, critical, reducing }: HelmholtzFluid): number {
+function residualDensity(
+  { T, molarDensity }: HelmholtzState,
+  { saturation, critical, reducing }: HelmholtzFluid,
+): number {
   if (T >= critical.T || molarDensity >= reducing.rho || !('vapour' in saturation)) return 1;
   return exponentialAncillary(saturation.vapour, T) / reducing.rho;
 }
