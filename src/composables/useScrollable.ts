@@ -7,7 +7,7 @@ export function useScrollable(element: Readonly<Ref<HTMLElement | undefined>>) {
 
   function look(): void {
     const strip = element.value;
-    scrollable.value = strip !== undefined && strip.scrollWidth > strip.clientWidth + 1;
+    scrollable.value = strip !== undefined && strip !== null && strip.scrollWidth > strip.clientWidth + 1;
   }
   onMounted(() => {
     if (element.value === undefined) return;

@@ -52,10 +52,11 @@ const pages = (): [name: string, path: string][] => [
 
 describe('axe finds nothing', () => {
   it('on the sign-in page', async () => {
-    const page = await stage.browser.newPage({ baseURL: stage.origin });
+    const context = await stage.browser.newContext({ baseURL: stage.origin });
+    const page = await context.newPage();
     await page.goto('/sign-in');
     expect(await violations(page)).toEqual([]);
-    await page.close();
+    await context.close();
   });
 
   it.each([

@@ -93,7 +93,10 @@ export async function openStage(): Promise<Stage> {
     },
     async close() {
       if (process.env.WALLFLUX_PICTURES !== undefined) {
-        for (const [index, page] of browser.contexts().flatMap((context) => context.pages()).entries()) {
+        for (const [index, page] of browser
+          .contexts()
+          .flatMap((context) => context.pages())
+          .entries()) {
           await page.screenshot({ path: `${process.env.WALLFLUX_PICTURES}/window-${index}.png` });
         }
       }

@@ -83,7 +83,8 @@ function failureOf(plan: Plan, at: number, x: number, y: number): Failure {
     return { kind: 'overflow', node, values };
   }
   // Within a power that is multiplied out the registers hold neither base nor exponent.
-  if (isPower) return { kind: 'overflow', node, values: code === Op.power || code === Op.wholePower ? [x, exponent] : [] };
+  if (isPower)
+    return { kind: 'overflow', node, values: code === Op.power || code === Op.wholePower ? [x, exponent] : [] };
   return { kind: 'overflow', node, values: node.type === 'binary' ? [x, y] : [x] };
 }
 
