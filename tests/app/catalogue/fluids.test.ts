@@ -1,5 +1,7 @@
 import { describe, expect, it } from 'vitest';
+import { listSubstances } from '#engine';
 import { fluidState } from 'src/composables/fluidState';
+import { findSubstances, useFluidStore } from 'src/composables/useFluidStore';
 
 const figure = (text: string | undefined) => Number(text?.replace(/[\s\u00a0]/g, '') ?? Number.NaN);
 
@@ -21,5 +23,24 @@ describe('a state of a fluid', () => {
     expect(fluidState('water', { T: '300 bar', p: '3 MPa' })).toMatchObject({ problems: [expect.any(String)] });
     expect(fluidState('water', { T: '', p: '3 MPa' }).problems.length).toBeGreaterThan(0);
     expect(fluidState('water', { T: '', p: '3 MPa' }).row).toBeUndefined();
+  });
+});
+
+describe('the store of fluids', () => {
+  it('is found through by name, formula and other words', () => {
+    const names = (sought: string) =>
+      findSubstances(sought).flatMap(({ substances }) => substances.map(({ id }) => id));
+    expect(names('steam')).toEqual(['water']);
+    expect(names('h2o')).toContain('water');
+    expect(names('no-such-substance')).toEqual([]);
+  });
+
+  it('shows a state of every substance as soon as it is chosen', () => {
+    const failed: string[] = [];
+    for (const { id } of listSubstances()) {
+      const { outcome } = useFluidStore(() => id);
+      if (outcome.value.row === undefined) failed.push(`${id}: ${outcome.value.problems.join('; ')}`);
+    }
+    expect(failed).toEqual([]);
   });
 });
