@@ -9,6 +9,7 @@ import * as lockedRevisions from './20261201000700_keep_locked_revisions';
 import * as signedParts from './20261201000800_keep_signed_parts';
 import * as summaryFigures from './20261201000900_add_summary_figures';
 import * as signersNames from './20261201001000_keep_signers_names';
+import * as indexPeople from './20261201001100_index_people';
 
 /** In the order in which they are applied. Names stay for good: the database remembers them. */
 const migrations: readonly (readonly [name: string, migration: Knex.Migration])[] = [
@@ -22,6 +23,7 @@ const migrations: readonly (readonly [name: string, migration: Knex.Migration])[
   ['20261201000800_keep_signed_parts', signedParts],
   ['20261201000900_add_summary_figures', summaryFigures],
   ['20261201001000_keep_signers_names', signersNames],
+  ['20261201001100_index_people', indexPeople],
 ];
 
 export const migrationSource: Knex.MigrationSource<readonly [string, Knex.Migration]> = {

@@ -1,5 +1,5 @@
 import type { IncomingMessage } from 'node:http';
-import type { Request, RequestHandler } from 'express';
+import type { RequestHandler } from 'express';
 import { may, revisionStates, syncClose, type Account } from '#contract';
 import { ApiError } from '../errors/index';
 import { sameOrigin } from '../middleware/origin';
@@ -36,12 +36,12 @@ export class Admission {
     if (!sameOrigin(request, this.context.config.publicOrigin)) return syncClose.forbidden;
     const signedIn = await accountOfRequest(request, this.session, this.context.db);
     if (signedIn === undefined) return syncClose.notSignedIn;
-    const { account } = signedIn;
+    const { account, sessionId, holds } = signedIn;
     const first = await this.look(account.id, revisionId);
     if (typeof first === 'number') return first;
     const decide = async (): Promise<Decision> =>
-      (await sessionHolds(request as Request)) ? this.look(account.id, revisionId) : syncClose.notSignedIn;
-    return { ...signedIn, ...first, revisionId, decide };
+      (await holds()) ? this.look(account.id, revisionId) : syncClose.notSignedIn;
+    return { account, sessionId, ...first, revisionId, decide };
   }
 
   private async look(personId: string, revisionId: string): Promise<Decision> {
@@ -64,14 +64,4 @@ export class Admission {
 function writingOf(role: Parameters<typeof may>[0], state: Parameters<typeof may>[2]): Writing {
   if (may(role, 'content.write', state)) return 'may';
   return revisionStates.some((other) => may(role, 'content.write', other)) ? 'WRONG_STATE' : 'FORBIDDEN';
-}
-
-/** Whether the session with which somebody came in still stands in the store. */
-function sessionHolds({ sessionStore, sessionID }: Request): Promise<boolean> {
-  return new Promise((resolve, reject) =>
-    sessionStore.get(sessionID, (error: unknown, session) => {
-      if (error) reject(error instanceof Error ? error : new Error('The session could not be read.'));
-      else resolve(session !== null && session !== undefined);
-    }),
-  );
 }

@@ -13,6 +13,11 @@ function readCalculation(file: string) {
   );
 }
 
+/** Zero-based number of the line in which an offset lies. */
+function lineAt(source: string, offset: number): number {
+  return source.slice(0, offset).split('\n').length - 1;
+}
+
 function report(cells: readonly CellInput[], result: CalculationResult) {
   const names = Object.fromEntries(
     result.names.map(({ name, value }) => [
@@ -26,8 +31,12 @@ function report(cells: readonly CellInput[], result: CalculationResult) {
       .filter((line) => line.kind === 'require')
       .map((line) => ({ cell: cell.id, line: line.line, satisfied: line.satisfied ?? null })),
   );
+  const sources = new Map(cells.map(({ id, source }) => [id, source]));
   const diagnostics = results.flatMap((cell) =>
-    cell.diagnostics.map(({ severity, code, message, span }) => ({ cell: cell.id, severity, code, message, span })),
+    cell.diagnostics.map(({ severity, code, message, span }) => {
+      const line = span === undefined ? undefined : lineAt(sources.get(cell.id) ?? '', span.from);
+      return { cell: cell.id, line, severity, code, message, span };
+    }),
   );
   const outsideRange = results
     .filter((cell) => cell.outsideRange.length > 0)

@@ -1,30 +1,43 @@
 import type { Server } from 'node:http';
 import type { RequestHandler } from 'express';
 import { Server as SocketServer, type Socket } from 'socket.io';
-import { watchRequest, type Account, type Notice } from '#contract';
+import { watchRequest, type Notice, type WatchRequest } from '#contract';
 import { sameOrigin } from '../middleware/origin';
 import { authorizeProject, authorizeRevision } from '../services/access';
-import type { ServerContext } from '../services/context';
-import { accountOfRequest } from './account';
+import type { ServerContext, ServerEvent } from '../services/context';
+import { accountOfRequest, type SignedIn } from './account';
 
 /** Where Socket.IO listens. */
 export const noticesPath = '/socket.io';
+
+/** A browser looks at one or two things; when it asks for more, the oldest are let go. */
+const mostWatched = 20;
+/** How often it is asked whether the sessions behind open connections still stand, in ms. */
+const betweenReviews = 120_000;
 
 export interface Realtime {
   close(): Promise<void>;
 }
 
-interface SocketData {
-  account: Account;
-  sessionId: string;
+interface FromBrowser {
+  watch(request: unknown, answer: unknown): void;
 }
+interface ToBrowser {
+  notice(notice: Notice): void;
+}
+interface SocketData {
+  signedIn: SignedIn;
+  /** Rooms in the order in which they were asked for. */
+  watched: string[];
+}
+type Watcher = Socket<FromBrowser, ToBrowser, object, SocketData>;
 
 const projectRoom = (id: string) => `project:${id}`;
 const revisionRoom = (id: string) => `revision:${id}`;
 
 /** Live notices over Socket.IO: who watches a revision or a project is told what to fetch again. */
 export function attachRealtime(server: Server, session: RequestHandler, context: ServerContext): Realtime {
-  const io = new SocketServer<object, { notice(notice: Notice): void }, object, SocketData>(server, {
+  const io = new SocketServer<FromBrowser, ToBrowser, object, SocketData>(server, {
     path: noticesPath,
     destroyUpgrade: false,
     serveClient: false,
@@ -41,60 +54,79 @@ export function attachRealtime(server: Server, session: RequestHandler, context:
     accountOfRequest(socket.request, session, context.db).then((signedIn) => {
       if (signedIn === undefined) next(new Error('NOT_SIGNED_IN'));
       else {
-        socket.data = signedIn;
+        socket.data = { signedIn, watched: [] };
         next();
       }
     }, next);
   });
-
-  async function watch(socket: Socket<object, object, object, SocketData>, given: unknown): Promise<boolean> {
-    const request = watchRequest.safeParse(given);
-    if (!request.success) return false;
-    try {
-      if ('projectId' in request.data) {
-        await authorizeProject(context.db, socket.data.account, request.data.projectId, 'project.read');
-        await socket.join(projectRoom(request.data.projectId));
-      } else {
-        await authorizeRevision(context.db, socket.data.account.id, request.data.revisionId, 'revision.read');
-        await socket.join(revisionRoom(request.data.revisionId));
-      }
-      return true;
-    } catch {
-      return false;
-    }
-  }
-
   io.on('connection', (socket) => {
-    const untyped = socket as unknown as Socket<object, object, object, SocketData> & {
-      on(event: 'watch', listener: (given: unknown, answer: unknown) => void): void;
-    };
-    untyped.on('watch', (given, answer) => {
-      void watch(untyped, given).then((allowed) => {
+    socket.on('watch', (given, answer) => {
+      void watch(context, socket, given).then((allowed) => {
         if (typeof answer === 'function') (answer as (allowed: boolean) => void)(allowed);
       });
     });
   });
 
   const endListening = context.events.listen((event) => {
-    if (event.kind === 'notice') {
-      const { projectId, revisionId } = event.notice;
-      const rooms = [projectRoom(projectId), ...(revisionId === null ? [] : [revisionRoom(revisionId)])];
-      io.to(rooms).emit('notice', event.notice);
-    }
-    for (const socket of io.sockets.sockets.values()) {
-      const ended =
-        (event.kind === 'signed-out' && socket.data.sessionId === event.sessionId) ||
-        (event.kind === 'access' && socket.data.account.id === event.personId);
-      // Comes back by itself, and is asked anew what it may watch.
-      if (ended) socket.conn.close();
-    }
+    if (event.kind === 'notice') io.to(roomsOf(event.notice)).emit('notice', event.notice);
+    // Comes back by itself, and is asked anew what it may watch.
+    else for (const socket of io.sockets.sockets.values()) if (ends(event, socket.data.signedIn)) socket.conn.close();
   });
+  const reviews = setInterval(() => {
+    for (const socket of io.sockets.sockets.values()) void closeWithoutSession(socket);
+  }, betweenReviews);
+  reviews.unref();
 
   return {
     async close() {
+      clearInterval(reviews);
       endListening();
       io.disconnectSockets(true);
       await io.close();
     },
   };
+}
+
+/** Lets a browser hear of a project or a revision, when its person may read it; answers whether. */
+async function watch({ db }: ServerContext, socket: Watcher, given: unknown): Promise<boolean> {
+  const request = watchRequest.safeParse(given);
+  if (!request.success) return false;
+  const { signedIn, watched } = socket.data;
+  try {
+    const room = await authorizedRoom(db, signedIn, request.data);
+    if (watched.includes(room)) return true;
+    watched.push(room);
+    await socket.join(room);
+    const oldest = watched.length > mostWatched ? watched.shift() : undefined;
+    if (oldest !== undefined) await socket.leave(oldest);
+    return true;
+  } catch {
+    return false;
+  }
+}
+
+/** The room of what is asked for; throws when the person may not read it. */
+async function authorizedRoom(db: ServerContext['db'], { account }: SignedIn, request: WatchRequest): Promise<string> {
+  if ('projectId' in request) {
+    await authorizeProject(db, account, request.projectId, 'project.read');
+    return projectRoom(request.projectId);
+  }
+  await authorizeRevision(db, account.id, request.revisionId, 'revision.read');
+  return revisionRoom(request.revisionId);
+}
+
+const roomsOf = ({ projectId, revisionId }: Notice): string[] =>
+  revisionId === null ? [projectRoom(projectId)] : [projectRoom(projectId), revisionRoom(revisionId)];
+
+function ends(event: ServerEvent, { account, sessionId }: SignedIn): boolean {
+  if (event.kind === 'signed-out') return event.sessionId === sessionId;
+  return event.kind === 'access' && event.personId === account.id;
+}
+
+async function closeWithoutSession(socket: Watcher): Promise<void> {
+  try {
+    if (!(await socket.data.signedIn.holds())) socket.conn.close();
+  } catch {
+    // Not known now; asked again at the next turn.
+  }
 }

@@ -22,7 +22,7 @@ export const inputWords: Readonly<Partial<Record<string, string>>> = {
 const usual: Readonly<Record<string, string>> = {
   p: '1 atm',
   x: '0.5',
-  massFraction: '0.3',
+  massFraction: '0.1',
   RH: '0.5',
   W: '0.01',
   T_wb: '20 degC',

@@ -2,13 +2,25 @@ import { onScopeDispose } from 'vue';
 import { io, type Socket } from 'socket.io-client';
 import { notice as noticeSchema, type Notice, type WatchRequest } from '#contract';
 
+/** How long to wait after a refusal, in ms. */
+const afterRefusal = 5000;
+
 let shared: { socket: Socket; users: number } | undefined;
 
 /** One connection for the whole application, closed when nobody uses it. */
 function takeSocket(): Socket {
-  shared ??= { socket: io({ path: '/socket.io', transports: ['websocket'] }), users: 0 };
+  shared ??= { socket: openSocket(), users: 0 };
   shared.users += 1;
   return shared.socket;
+}
+
+function openSocket(): Socket {
+  const socket = io({ path: '/socket.io', transports: ['websocket'] });
+  // Refused by the server (signed out): the socket does not try again by itself, but somebody may sign in again.
+  socket.on('connect_error', () => {
+    if (!socket.active) setTimeout(() => shared?.socket === socket && socket.connect(), afterRefusal);
+  });
+  return socket;
 }
 
 function leaveSocket(): void {

@@ -1,61 +1,14 @@
 import * as encoding from 'lib0/encoding';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import WebSocket from 'ws';
-import { WebsocketProvider } from 'y-websocket';
-import * as Y from 'yjs';
-import { openDocument, type CalculationDocument } from '#document';
-import { syncMessage } from '#contract';
-import { calculationIn, createCalculation, startTestServer, type Client, type TestServer } from '../helpers/server';
+import { calculationIn, createCalculation, startTestServer, type TestServer } from '../helpers/server';
+import { join, sourceOf, synced } from '../helpers/sync';
 
 let server: TestServer;
 beforeAll(async () => {
   server = await startTestServer();
 });
 afterAll(() => server.close());
-
-interface Writer {
-  doc: Y.Doc;
-  document: CalculationDocument;
-  provider: WebsocketProvider;
-  refused: string[];
-  kept: number;
-  end(): void;
-}
-
-let ids = 0;
-
-/** A browser's side of the sync, with the stock client and a session cookie. */
-function join(client: Client, revisionId: string): Writer {
-  class SocketWithCookie extends WebSocket {
-    constructor(address: string | URL) {
-      super(address, { headers: { Cookie: client.cookie, Origin: server.origin } });
-    }
-  }
-  const doc = new Y.Doc();
-  const provider = new WebsocketProvider(`${server.origin.replace('http', 'ws')}/sync`, revisionId, doc, {
-    WebSocketPolyfill: SocketWithCookie as never,
-    disableBc: true,
-    maxBackoffTime: 200,
-  });
-  const writer: Writer = {
-    doc,
-    document: openDocument(doc, { newId: () => `new${(ids += 1)}` }),
-    provider,
-    refused: [],
-    kept: 0,
-    end: () => provider.destroy(),
-  };
-  provider.messageHandlers[syncMessage.kept] = () => {
-    writer.kept += 1;
-  };
-  provider.messageHandlers[syncMessage.refused] = () => {
-    writer.refused.push('refused');
-  };
-  return writer;
-}
-
-const synced = (writer: Writer) => expect.poll(() => writer.provider.synced, { timeout: 10_000 }).toBe(true);
-const sourceOf = (writer: Writer, id: string) => writer.document.source(id)?.toJSON();
 
 describe('two engineers at one sheet', () => {
   it('see each other’s text, in one cell and in different ones', async () => {
@@ -79,9 +32,9 @@ describe('two engineers at one sheet', () => {
     const { revision } = await createCalculation(server);
     const one = join(server.client.engineer, revision.id);
     await synced(one);
-    const keptBefore = one.kept;
+    const keptBefore = one.kept.times;
     one.document.source('c21')?.insert(0, '# before the restart\n');
-    await expect.poll(() => one.kept).toBeGreaterThan(keptBefore);
+    await expect.poll(() => one.kept.times).toBeGreaterThan(keptBefore);
     await server.stop();
     one.document.source('c21')?.insert(0, '# while it was away\n');
     await server.startAgain();

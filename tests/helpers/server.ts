@@ -106,19 +106,21 @@ async function start(database: TestDatabase, port: number): Promise<RunningServe
   return startServer(config, testLog);
 }
 
-/** A server on a database of its own with a project and one person in each part. */
-export async function startTestServer(): Promise<TestServer> {
+/** A server on a database of its own with a project and one person in each part; without `people` an empty one. */
+export async function startTestServer({ people = true } = {}): Promise<TestServer> {
   const database = await createTestDatabase();
   let running = await start(database, 0);
   const origin = `http://127.0.0.1:${running.port}`;
   const { db } = running.context;
   const passwordHash = await hashPassword(testPassword);
-  const [project] = await db('projects')
-    .insert({ number: '9001', title: 'Trial plant', firm: 'Firm' })
-    .returning<{ id: string }[]>('id');
+  const [project] = !people
+    ? []
+    : await db('projects')
+        .insert({ number: '9001', title: 'Trial plant', firm: 'Firm' })
+        .returning<{ id: string }[]>('id');
   const projectId = project?.id ?? '';
   const client: Partial<Record<Part, Client>> = {};
-  for (const part of parts) {
+  for (const part of people ? parts : []) {
     const account = await insertPerson(db, {
       signInName: part,
       name: `P. ${part}`,

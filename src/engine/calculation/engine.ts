@@ -163,7 +163,7 @@ class KeptCalculation implements Engine {
       symbol: (key) => (encircled.has(baseOf(key)) ? {} : this.symbol(key)),
       names: () => {
         this.wondering.add(node);
-        return graph.names();
+        return [...graph.names()].filter((name) => name !== node.defines);
       },
       keysOf: (name) => [...(this.definition(name)?.symbols.keys() ?? [])].filter((key) => key !== name),
       outsideBehind: (name) => (encircled.has(name) ? [] : (this.definition(name)?.outsideRange ?? [])),

@@ -62,6 +62,9 @@ export class Sheet {
       this.positions.set(cell.id, this.order.length);
       this.order.push(cell.id);
       touched.rearranged = true;
+    } else if (before.cell.kind !== cell.kind) {
+      // A cell that becomes a section, or no longer is one, changes the numbers of those behind it.
+      touched.rearranged = true;
     }
     this.replace(before, this.compile(cell), touched);
   }

@@ -45,7 +45,7 @@ const table = {
     'error',
     'The unit of the result must be known beforehand: {given} can only be raised to a figure, not to a value that may change.',
   ],
-  EXPONENT_ODD: ['EXPONENT', 'error', '{given} to the power of {exponent} is no quantity.'],
+  EXPONENT_ODD: ['EXPONENT', 'error', '{Given} to the power of {exponent} is no quantity.'],
 
   // Levels
   LEVELS: [
@@ -129,10 +129,7 @@ export function evaluationDiagnostic(
   mend?: Mend,
 ): Diagnostic {
   const [code, severity, sentence] = table[error];
-  const filled = sentence.replace(/\{(\w+)\}/g, (_, name: string) => String(parameters[name] ?? ''));
-  // A sentence may begin with a parameter: `a length (m) to the power …`.
-  const message =
-    filled.startsWith('a ') || filled.startsWith('an ') ? filled[0]?.toUpperCase() + filled.slice(1) : filled;
+  const message = sentence.replace(/\{(\w+)\}/g, (_, name: string) => String(parameters[name] ?? ''));
   return {
     code,
     severity,

@@ -120,7 +120,7 @@ export function powerOf(context: Context, node: BinaryNode, base: Inferred, expo
   if (context.settle(base, node.left.span) === undefined) return undefined;
   const dimension = powerOfDimension(base.dimension, exponent.constant);
   if (dimension === undefined) {
-    const parameters = { given: describe(base), exponent: Number(exponent.constant.toPrecision(6)) };
+    const parameters = { Given: describe(base).replace(/^a/, 'A'), exponent: Number(exponent.constant.toPrecision(6)) };
     context.report(evaluationDiagnostic('EXPONENT_ODD', node.span, parameters));
     return undefined;
   }

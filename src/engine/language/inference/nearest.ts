@@ -1,20 +1,26 @@
 /**
- * Number of single-character edits between two words (Levenshtein 1966), or `limit` as soon as it
- * is certain to be no less: sheets have thousands of names.
+ * Number of single-character edits between two words, two letters changed about counting as one
+ * (optimal string alignment, after Damerau 1964); `limit` as soon as it is certain to be no less:
+ * sheets have thousands of names.
  */
 function editDistanceBelow(left: string, right: string, limit: number): number {
   if (Math.abs(left.length - right.length) >= limit) return limit;
+  let before: number[] = [];
   let row = Array.from({ length: right.length + 1 }, (_, index) => index);
   for (let i = 1; i <= left.length; i += 1) {
     const next = [i];
     let least = i;
     for (let j = 1; j <= right.length; j += 1) {
       const substitution = (row[j - 1] ?? 0) + (left[i - 1] === right[j - 1] ? 0 : 1);
-      const distance = Math.min(substitution, (row[j] ?? 0) + 1, (next[j - 1] ?? 0) + 1);
+      let distance = Math.min(substitution, (row[j] ?? 0) + 1, (next[j - 1] ?? 0) + 1);
+      if (i > 1 && j > 1 && left[i - 1] === right[j - 2] && left[i - 2] === right[j - 1])
+        distance = Math.min(distance, (before[j - 2] ?? 0) + 1);
       next.push(distance);
       if (distance < least) least = distance;
     }
-    if (least >= limit) return limit;
+    // A change about reaches back over one row.
+    if (least > limit) return limit;
+    before = row;
     row = next;
   }
   return Math.min(limit, row[right.length] ?? 0);
@@ -39,7 +45,8 @@ function countBits(bits: number): number {
  */
 export function nearest(name: string, candidates: Iterable<string>): string | undefined {
   let best: string | undefined;
-  let least = Math.max(2, Math.ceil(name.length / 3) + 1) - 1;
+  // A third of the letters may differ, but never all of them.
+  let least = Math.min(Math.max(1, Math.ceil(name.length / 3)), Math.max(name.length - 1, 0.5));
   const letters = lettersOf(name);
   for (const candidate of candidates) {
     if (candidate === name || Math.abs(candidate.length - name.length) > least) continue;
