@@ -4,7 +4,7 @@ import { describe, expect, it } from 'vitest';
 import { last } from '../calculation/sheet';
 
 // Reference: mathjs 15.2.0, evaluating the same expressions with plain numbers and with its Units.
-const math = create(all, {});
+const math = create(all ?? {}, {});
 
 /** A well-typed expression in our spelling and in that of mathjs. */
 interface Twin {
